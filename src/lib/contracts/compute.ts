@@ -1,0 +1,89 @@
+import type { Remark } from '#lib/remarks/remark.ts';
+import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
+import type { Plan } from './plan.ts';
+import type { AgeUnit, Confirm } from './materials.ts';
+import type { Measure } from './measure.ts';
+
+/** Everything an analysis runs on. Plain data: it crosses a thread boundary. */
+export type AnalysisInputs = {
+	/** the tree set's text as given */
+	readonly treeText: string;
+	readonly ageUnit: AgeUnit;
+	/** the person accepted that tips be levelled by extending terminal branches */
+	readonly spreadConfirmed: boolean;
+	readonly measure: Measure;
+	readonly overlap: {
+		readonly species: readonly string[];
+		/** strict lower triangle, row by row: (1,0), (2,0), (2,1), …; NaN where a pair is missing */
+		readonly lower: Float64Array;
+		/** remarks of the run; an open `settle` refuses the analysis */
+		readonly remarks: readonly Remark[];
+	};
+	readonly decisions: readonly { readonly from: string; readonly to: string | null; readonly why?: string }[];
+};
+
+/** What is known of one tree of a set without its whole structure. */
+export type TreeFacts = {
+	readonly name: string;
+	readonly tips: readonly string[];
+	readonly rootAge: number | null;
+	/** relative spread of root-to-tip distances; null with missing lengths */
+	readonly ultrametricSpread: number | null;
+	readonly polytomies: number;
+	readonly remarks: readonly Remark[];
+};
+
+export type TreeReading = {
+	readonly format: 'newick' | 'nexus';
+	readonly trees: readonly TreeFacts[];
+	readonly remarks: readonly Remark[];
+};
+
+/** One tree to draw or to serve: preorder, ages in the unit of the set. */
+export type TreeStructure = {
+	readonly parent: readonly number[];
+	readonly age: readonly number[];
+	readonly label: readonly string[];
+	/** tips below each node */
+	readonly tips: readonly number[];
+	/** names of the tips in tree order */
+	readonly tipNames: readonly string[];
+};
+
+/** What an analysis would use, found before it runs. */
+export type AnalysisPreview = {
+	readonly species: readonly string[];
+	readonly dropped: readonly { readonly name: string; readonly in: 'tree' | 'data'; readonly why: string }[];
+	readonly pairs: number;
+	readonly distinctAges: number;
+	readonly rootAge: number;
+	/** species on each side of the root of the pruned tree */
+	readonly sides: readonly number[];
+	readonly rootPairShare: number;
+	readonly smallestP: number;
+	readonly exact: boolean;
+	readonly remarks: readonly Remark[];
+};
+
+/** Tasks of the compute threads: one entry a task, argument and answer. */
+export type ComputeTasks = {
+	readTrees: { argument: { text: string; confirm?: Confirm }; answer: TreeReading };
+	treeStructure: { argument: { text: string; tree: number; spreadConfirmed: boolean }; answer: TreeStructure };
+	mrcaAges: {
+		argument: { text: string; tree: number; spreadConfirmed: boolean; species?: readonly string[] };
+		/** values row-major, shape (n, n) */
+		answer: { species: readonly string[]; values: Float64Array };
+	};
+	preview: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: AnalysisPreview };
+	analyse: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: AnalysisResult };
+};
+export type ComputeTask = keyof ComputeTasks;
+
+/** What the thread posts on the progress port while `analyse` runs. */
+export type ComputeProgress = AnalysisProgress;
+
+/** An InputError that crossed a thread boundary. */
+export type ComputeRefusal = { readonly code: string; readonly message: string; readonly where?: Remark['where']; readonly remarks?: readonly Remark[] };
+export type ComputeOutcome<Task extends ComputeTask> =
+	| { readonly ok: true; readonly value: ComputeTasks[Task]['answer'] }
+	| { readonly ok: false; readonly refusal: ComputeRefusal };
