@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import { remarkSchema } from './remark.ts';
-import { STATISTICS } from './plan.ts';
+import { AGE_UNITS } from './materials.ts';
+import { measureSchema } from './measure.ts';
+import { ALTERNATIVES, STATISTICS } from './plan.ts';
 
 const probability = z.number().min(0).max(1);
 
@@ -47,7 +49,9 @@ export const permutationSchema = z.object({
 	withinDeepestSplit: deepestSplitSchema.nullable()
 });
 
-export const nodeTestSchema = z.object({ slope: z.number(), intercept: z.number(), rSquared: z.number() }).extend(tailsSchema.shape);
+export const nodeTestSchema = z
+	.object({ slope: z.number(), intercept: z.number(), rSquared: z.number() })
+	.extend(tailsSchema.shape);
 
 export const nodeSchema = z.object({
 	/** preorder index in the pruned tree */
@@ -81,6 +85,22 @@ export const plateDataSchema = z.object({
 	nodeSlopeHistogram: z.object({ edges: z.array(z.number()), counts: z.array(z.number().int()) }).nullable()
 });
 
+/** What was compared and how, so that a stored result can be read by itself. */
+export const comparedSchema = z.object({
+	measure: measureSchema,
+	ageUnit: z.enum(AGE_UNITS),
+	tree: z.object({ index: z.number().int(), name: z.string(), treesInSet: z.number().int() }),
+	rootAge: z.number(),
+	polytomies: z.number().int(),
+	ultrametricSpread: z.number(),
+	/** the person accepted that the tips be levelled */
+	levelled: z.boolean(),
+	meanOverlap: z.number(),
+	alternative: z.enum(ALTERNATIVES),
+	transform: z.enum(['none', 'logit']),
+	alpha: z.number()
+});
+
 export const FINDING_KINDS = [
 	'signal',
 	'stronger-than-random-walk',
@@ -95,12 +115,15 @@ export const findingSchema = z.object({
 	kind: z.enum(FINDING_KINDS),
 	title: z.string(),
 	sentence: z.string(),
+	/** the sentence in stretches; one with a key is a number that can be traced */
+	parts: z.array(z.object({ text: z.string(), key: z.enum(['slope', 'p', 'within', 'species', 'shuffles']).optional() })),
 	/** what the result does not show */
 	limits: z.array(z.string()),
 	cautions: z.array(z.object({ code: z.string(), message: z.string() }))
 });
 
 export const analysisResultSchema = z.object({
+	compared: comparedSchema,
 	species: z.number().int(),
 	pairs: z.number().int(),
 	dropped: z.array(z.object({ name: z.string(), in: z.enum(['tree', 'data']), why: z.string() })),

@@ -83,7 +83,11 @@ export type ComputeTask = keyof ComputeTasks;
 export type ComputeProgress = AnalysisProgress;
 
 /** An InputError that crossed a thread boundary. */
-export type ComputeRefusal = { readonly code: string; readonly message: string; readonly where?: Remark['where']; readonly remarks?: readonly Remark[] };
+export type ComputeRefusal = {
+	readonly code: string;
+	readonly message: string;
+	readonly where?: Remark['where'];
+	readonly remarks?: readonly Remark[];
+};
 export type ComputeOutcome<Task extends ComputeTask> =
-	| { readonly ok: true; readonly value: ComputeTasks[Task]['answer'] }
-	| { readonly ok: false; readonly refusal: ComputeRefusal };
+	{ readonly ok: true; readonly value: ComputeTasks[Task]['answer'] } | { readonly ok: false; readonly refusal: ComputeRefusal };

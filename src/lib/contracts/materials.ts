@@ -48,10 +48,16 @@ export const overlapRunRequestSchema = z
 	.refine((body) => (body.matrix === undefined) !== (body.csv === undefined), 'Give either `matrix` or `csv`, one of the two.');
 export type OverlapRunRequest = z.infer<typeof overlapRunRequestSchema>;
 
-export const studyRequestSchema = z.strictObject({ title: label, lab: z.string().optional(), question: z.string().max(2000).optional() });
+export const studyRequestSchema = z.strictObject({
+	title: label,
+	lab: z.string().optional(),
+	question: z.string().max(2000).optional()
+});
 
 export const namesRequestSchema = z.strictObject({
-	decisions: z.array(z.strictObject({ from: z.string().min(1), to: z.string().min(1).nullable(), why: z.string().max(500).optional() })).max(10_000)
+	decisions: z
+		.array(z.strictObject({ from: z.string().min(1), to: z.string().min(1).nullable(), why: z.string().max(500).optional() }))
+		.max(10_000)
 });
 
 export const tokenRequestSchema = z.strictObject({ email: z.string().max(320), password: z.string().max(200), label });

@@ -29,7 +29,10 @@ export const planRequestSchema = z.strictObject({
 		.strictObject({ minTips: z.number().int().min(2).default(3), declared: z.array(z.array(z.string())).optional() })
 		.nullable()
 		.default(null),
-	signal: z.strictObject({ variables: z.array(z.string()) }).nullable().default(null),
+	signal: z
+		.strictObject({ variables: z.array(z.string()) })
+		.nullable()
+		.default(null),
 	robustness: z.strictObject({}).loose().nullable().default(null)
 });
 export type PlanRequest = z.infer<typeof planRequestSchema>;
