@@ -35,7 +35,7 @@ export function formatCount(value: number): string {
  * @param floor - the smallest value the test can give; null for an exact test, which has no floor to hide behind
  */
 export function formatP(p: number, floor: number | null): string {
-	if (floor !== null && p <= floor * (1 + 1e-9)) return `≤ ${trimmed(floor)}`;
+	if (floor !== null && p <= floor * (1 + 1e-9)) return `≤ ${trimmed(floor).replace(/0+$/, '')}`;
 	return `= ${trimmed(p)}`;
 }
 
