@@ -1,0 +1,52 @@
+import { MessageChannel } from 'node:worker_threads';
+import type { ComputeOutcome, ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
+import { InputError } from '#lib/remarks/inputError.ts';
+import type { Remark } from '#lib/remarks/remark.ts';
+import { heldRuntime, runtime } from '#lib/server/heldRuntime.ts';
+
+export type ComputeOptions = {
+	readonly onProgress?: (progress: ComputeProgress) => void;
+	/** ends the thread that works on the task */
+	readonly signal?: AbortSignal;
+};
+
+/** A refusal of the data with everything that was noticed on the way to it. */
+export class ComputeRefusedError extends InputError {
+	readonly remarks: readonly Remark[];
+
+	constructor(refusal: { code: string; message: string; where?: Remark['where']; remarks?: readonly Remark[] }) {
+		super(refusal.code, refusal.message, refusal.where);
+		this.remarks = refusal.remarks ?? [];
+	}
+}
+
+/**
+ * Runs one task on a compute thread, so that the process goes on answering pages.
+ *
+ * @throws {InputError} when the data do not allow it, with `remarks` where there are any
+ * @throws {Error} named AbortError after `signal`; any other error is a defect of ours
+ */
+export async function compute<Task extends ComputeTask>(
+	task: Task,
+	argument: ComputeTasks[Task]['argument'],
+	{ onProgress, signal }: ComputeOptions = {}
+): Promise<ComputeTasks[Task]['answer']> {
+	const pool = runtime().pool.current();
+	const channel = onProgress === undefined ? null : new MessageChannel();
+	channel?.port2.on('message', (progress: ComputeProgress) => onProgress?.(progress));
+	try {
+		const outcome: ComputeOutcome<Task> = await pool.run(
+			{ task, argument, port: channel?.port1 ?? null },
+			{ transferList: channel === null ? [] : [channel.port1], signal: signal ?? null }
+		);
+		if (!outcome.ok) throw new ComputeRefusedError(outcome.refusal);
+		return outcome.value;
+	} finally {
+		channel?.port2.close();
+	}
+}
+
+/** Whether a stopped task was stopped on purpose: by its signal, or because the program is closing. */
+export function wasStopped(thrown: unknown, signal: AbortSignal): boolean {
+	return signal.aborted || heldRuntime() === undefined || (thrown instanceof Error && thrown.name === 'AbortError');
+}

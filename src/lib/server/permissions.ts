@@ -1,0 +1,106 @@
+import { error, redirect } from '@sveltejs/kit';
+import { ROLES, type Role, type SignedInUser } from '#lib/contracts/user.ts';
+import type { Access, AccessObject, Action } from './access.ts';
+import * as places from './repositories/access.ts';
+import * as logBook from './repositories/logBook.ts';
+import { askedFrom } from './requestScope.ts';
+
+export type { Access } from './access.ts';
+export { systemAccess } from './systemAccess.ts';
+
+const NOT_THERE = 'Nothing at this address, or it is not yours to see.';
+
+type ObjectKind = 'lab' | 'study' | 'account';
+
+/** The one table of permissions: the lowest role that may. What lies in a study is under the rules of the study. */
+export const LOWEST_ROLE: Readonly<Record<ObjectKind, Readonly<Partial<Record<Action, Role>>>>> = {
+	lab: { read: 'reader', create: 'analyst', change: 'lead', delete: 'lead', restore: 'lead', members: 'lead' },
+	study: {
+		read: 'reader',
+		comment: 'reader',
+		download: 'reader',
+		create: 'analyst',
+		change: 'analyst',
+		run: 'analyst',
+		share: 'analyst',
+		delete: 'lead',
+		restore: 'lead',
+		signOff: 'lead',
+		unlock: 'lead',
+		members: 'lead'
+	},
+	/** a person leads their own account and nobody else's */
+	account: { read: 'lead', create: 'lead', change: 'lead', delete: 'lead' }
+};
+
+/** What anybody may do with an example study, with or without an account. */
+export const OPEN_TO_VISITORS: ReadonlySet<Action> = new Set<Action>(['read', 'download']);
+
+const DOING: Readonly<Record<Action, string>> = {
+	read: 'read it',
+	comment: 'comment on it',
+	download: 'download from it',
+	create: 'add to it',
+	change: 'change it',
+	run: 'run analyses in it',
+	share: 'share it',
+	delete: 'delete from it',
+	restore: 'bring back what was deleted',
+	signOff: 'sign it off',
+	unlock: 'unlock it',
+	members: 'manage its members'
+};
+
+export function mayRole(role: Role, action: Action, kind: ObjectKind): boolean {
+	const lowest = LOWEST_ROLE[kind][action];
+	return lowest !== undefined && ROLES.indexOf(role) >= ROLES.indexOf(lowest);
+}
+
+/**
+ * The one place that decides. Roles and membership are read from the database at every call, so a change holds at once.
+ *
+ * Throws SvelteKit's errors: 404 when it is not there, deleted (except to restore) or in a lab of others, so that an id
+ * tells nothing; 403 with a sentence when the person's role is too low; 401 without a session (a page leads to the
+ * sign-in form instead).
+ */
+export async function can(user: SignedInUser | null, action: Action, object: AccessObject): Promise<Access> {
+	if ('account' in object) return canOnAccount(user, action, object.account);
+	const place = await places.find(object, { user: user?.id ?? null, deleted: action === 'restore' });
+	const isOpen = place?.isExample === true && !place.isDeleted;
+	if (place !== null && isOpen && OPEN_TO_VISITORS.has(action) && place.role === null) {
+		return { userId: user?.id ?? null, labId: place.labId, studyId: place.studyId, role: 'visitor' };
+	}
+	if (user === null) return askToSignIn();
+	if (place === null || (place.role === null && !isOpen)) return refuse(user, { action, object, place: null });
+	const kind: ObjectKind = 'lab' in object ? 'lab' : 'study';
+	if (place.role === null || !mayRole(place.role, action, kind)) return refuse(user, { action, object, place });
+	return { userId: user.id, labId: place.labId, studyId: place.studyId, role: place.role };
+}
+
+async function canOnAccount(user: SignedInUser | null, action: Action, account: string): Promise<Access> {
+	if (user === null) return askToSignIn();
+	const object = { account };
+	if (user.id !== account || !mayRole('lead', action, 'account')) return refuse(user, { action, object, place: null });
+	return { userId: user.id, labId: null, studyId: null, role: 'lead' };
+}
+
+function askToSignIn(): never {
+	const asked = askedFrom();
+	if (asked !== null && !asked.isApi) redirect(303, `/sign-in?next=${encodeURIComponent(asked.path)}`);
+	error(401, 'Sign in first, or send a token: Authorization: Bearer <token>.');
+}
+
+type Refusal = { action: Action; object: AccessObject; place: places.Place | null };
+
+async function refuse(user: SignedInUser, { action, object, place }: Refusal): Promise<never> {
+	await logBook.append(
+		{ userId: user.id, labId: place?.labId ?? null, studyId: place?.studyId ?? null },
+		{ action: 'access-refused', detail: { tried: action, ...object } }
+	);
+	if (place === null) error(404, NOT_THERE);
+	if (place.role === null)
+		error(403, `An example study is there to read and download; you cannot ${DOING[action]}. Copy it to work with it.`);
+	const lowest = LOWEST_ROLE['lab' in object ? 'lab' : 'study'][action];
+	const needed = lowest === undefined ? '' : ` It takes the role ${lowest}; a lead of the lab can change roles.`;
+	error(403, `As ${place.role} you cannot ${DOING[action]}.${needed}`);
+}
