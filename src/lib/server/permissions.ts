@@ -95,7 +95,7 @@ type Refusal = { action: Action; object: AccessObject; place: places.Place | nul
 async function refuse(user: SignedInUser, { action, object, place }: Refusal): Promise<never> {
 	await logBook.append(
 		{ userId: user.id, labId: place?.labId ?? null, studyId: place?.studyId ?? null },
-		{ action: 'access-refused', detail: { tried: action, ...object } }
+		{ action: 'access.refused', detail: { tried: action, ...object } }
 	);
 	if (place === null) error(404, NOT_THERE);
 	if (place.role === null)

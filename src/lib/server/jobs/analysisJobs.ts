@@ -3,7 +3,6 @@ import { isInTransaction } from '#lib/server/db/client.ts';
 import { runtime } from '#lib/server/heldRuntime.ts';
 import { openMailbox, type AnalysisEvent } from './analysisEvents.ts';
 import { storedState, type StoredState } from './heartbeat.ts';
-import { ANALYSES } from './queue.ts';
 
 export type { AnalysisEvent } from './analysisEvents.ts';
 
@@ -19,7 +18,7 @@ const LOOK_EVERY_MS = 1_000;
 export async function enqueueAnalysis(id: string): Promise<void> {
 	if (isInTransaction()) throw new Error('Expected enqueueAnalysis after the transaction, not inside it.');
 	const { queue, worker } = runtime();
-	await queue.boss.send(ANALYSES, { analysisId: id, attempt: 1 });
+	await queue.send({ analysisId: id, attempt: 1 });
 	worker.wake();
 }
 

@@ -10,7 +10,7 @@ import type { AnalysisFailure, AnalysisStore } from './analysisStore.ts';
 import * as heartbeat from './heartbeat.ts';
 import { joinProgress } from './joinProgress.ts';
 import { compute } from './pool.ts';
-import { ANALYSES, MOST_ATTEMPTS, type JobQueue } from './queue.ts';
+import { ANALYSES, MOST_ATTEMPTS, type AnalysisJob, type JobQueue } from './queue.ts';
 
 export type AnalysisWorker = {
 	/** analyses that run in this process */
@@ -32,7 +32,7 @@ type Parts = {
 	/** analyses at the same time */
 	readonly capacity: number;
 };
-type Job = { readonly id: string; readonly data: { readonly analysisId: string; readonly attempt?: number } };
+type Job = { readonly id: string; readonly data: AnalysisJob };
 
 /** How often a process looks for jobs that another process has queued. */
 const LOOK_EVERY_MS = 2_000;
@@ -58,7 +58,7 @@ export function openAnalysisWorker(parts: Parts): AnalysisWorker {
 	};
 	const take = async () => {
 		while (!state.isClosing && runs.size < parts.capacity) {
-			const [job] = await parts.queue.boss.fetch<Job['data']>(ANALYSES);
+			const [job] = await parts.queue.boss.fetch<AnalysisJob>(ANALYSES);
 			if (job === undefined) return;
 			begin(job);
 		}
@@ -115,7 +115,7 @@ async function runJob(job: Job, around: Surroundings): Promise<void> {
 	const run: RunningAnalysis = { id, stop: new AbortController(), latest: null };
 	running.set(id, run);
 	const beating = setInterval(() => void keepAlive(run), heartbeat.BEAT_MS);
-	let end: AnalysisEvent | null = null;
+	let end: AnalysisEvent | null;
 	try {
 		end = await runAnalysis(run, around);
 	} finally {
@@ -168,7 +168,7 @@ function failureOf(thrown: unknown, analysis: string): AnalysisFailure {
 
 /** The program is closing: the next one starts this analysis again, from the same seed. An orderly end is no failed attempt. */
 async function giveBack(job: Job, { queue }: Surroundings): Promise<void> {
-	if (await heartbeat.returnToWaiting(job.data.analysisId)) await queue.boss.send(ANALYSES, job.data);
+	if (await heartbeat.returnToWaiting(job.data.analysisId)) await queue.send(job.data);
 }
 
 async function recover(
@@ -180,14 +180,14 @@ async function recover(
 		if (!running.has(id)) await recoverOne(parts, id);
 	}
 	for (const id of await heartbeat.waitingWithoutJob(all ? 0 : WITHOUT_JOB_AFTER_MS)) {
-		await parts.queue.boss.send(ANALYSES, { analysisId: id, attempt: 1 });
+		await parts.queue.send({ analysisId: id, attempt: 1 });
 	}
 }
 
 async function recoverOne({ queue, store, progress }: Parts, id: string): Promise<void> {
 	const attempt = await heartbeat.closeLostJobs(id);
 	if (attempt < MOST_ATTEMPTS) {
-		if (await heartbeat.returnToWaiting(id)) await queue.boss.send(ANALYSES, { analysisId: id, attempt: attempt + 1 });
+		if (await heartbeat.returnToWaiting(id)) await queue.send({ analysisId: id, attempt: attempt + 1 });
 		return;
 	}
 	const message = `The program ended ${attempt} times while it worked on this analysis, perhaps for want of memory. Try fewer species, trees or permutations.`;

@@ -6,7 +6,16 @@ export type ExecuteSql = (
 	values?: readonly unknown[]
 ) => Promise<{ rows: Record<string, unknown>[]; rowCount: number }>;
 
-export type JobQueue = { readonly boss: PgBoss; readonly close: () => Promise<void> };
+export type AnalysisJob = {
+	readonly analysisId: string;
+	/** counts from 1; raised when the process of an earlier attempt died */
+	readonly attempt: number;
+};
+export type JobQueue = {
+	readonly boss: PgBoss;
+	readonly send: (job: AnalysisJob) => Promise<void>;
+	readonly close: () => Promise<void>;
+};
 
 export const ANALYSES = 'analyses';
 
@@ -17,11 +26,18 @@ export const MOST_ATTEMPTS = 3;
 export async function openQueue(executeSql: ExecuteSql): Promise<JobQueue> {
 	const boss = new PgBoss({
 		db: { executeSql: (text: string, values: unknown[]) => executeSql(text, values) },
-		// Nothing here runs by the clock; expiry of long analyses is told by their heartbeat.
+		// Nothing here runs by the clock.
 		schedule: false
 	});
 	boss.on('error', (cause) => log('error', 'queue', describeError(cause)));
 	await boss.start();
-	await boss.createQueue(ANALYSES, { name: ANALYSES, policy: 'standard', retryLimit: 0, expireInHours: 23 });
-	return { boss, close: () => boss.stop({ graceful: false, wait: true, close: false }) };
+	await boss.createQueue(ANALYSES);
+	return {
+		boss,
+		send: async (job) => {
+			// The queue's own expiry and retries would know less than the heartbeat; its longest expiry is a day.
+			await boss.send(ANALYSES, job, { retryLimit: 0, expireInHours: 23 });
+		},
+		close: () => boss.stop({ graceful: false, wait: true, close: false })
+	};
 }
