@@ -1,0 +1,30 @@
+import type { z } from 'zod';
+import type { analysisAnswerSchema } from '#lib/contracts/answers.ts';
+import type { Analysis } from '#lib/server/repositories/analyses.ts';
+
+type Answer = z.infer<typeof analysisAnswerSchema>;
+type Changes = readonly { readonly code: string; readonly message: string }[];
+
+export function analysisAnswer(analysis: Analysis, changes: Changes): Answer {
+	const { id, status, plan, hash, createdAt, finishedAt, result, failure } = analysis;
+	return {
+		id,
+		status,
+		progress: progressOf(analysis),
+		plan,
+		hash,
+		createdAt,
+		finishedAt,
+		...(result === null ? {} : { result }),
+		...(failure === null ? {} : { failure }),
+		outOfDate: [...changes],
+		remarks: result?.remarks ?? []
+	};
+}
+
+/** The slopes since the last message belong to the stream of events. */
+function progressOf({ progress }: Analysis): Answer['progress'] {
+	if (progress === null) return null;
+	const { newSlopes: _, ...rest } = progress;
+	return rest;
+}

@@ -1,0 +1,104 @@
+import { randomInt } from 'node:crypto';
+import type { AnalysisStatus } from '#lib/contracts/materials.ts';
+import { SEED_LIMIT, type Plan, type PlanRequest } from '#lib/contracts/plan.ts';
+import type { Remark } from '#lib/remarks/remark.ts';
+import type { Access } from '#lib/server/access.ts';
+import { compute } from '#lib/server/jobs/pool.ts';
+import { enqueueAnalysis } from '#lib/server/jobs/analysisJobs.ts';
+import * as analyses from '#lib/server/repositories/analyses.ts';
+import { analysisHash, computeArgument, decisionsFor, type Materials } from '#lib/server/repositories/analysisInputs.ts';
+import * as names from '#lib/server/repositories/names.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { Refusal } from './refusal.ts';
+
+export type Started = {
+	readonly id: string;
+	readonly status: AnalysisStatus;
+	/** what was noticed before it runs; empty when an equal one was there already */
+	readonly remarks: readonly Remark[];
+};
+
+/**
+ * Writes a plan down and queues it, unless an equal one on equal inputs waits, works or has finished already.
+ *
+ * @throws {Refusal} 404 for a material that is not in the study; 422 when a choice is open
+ * @throws {InputError} when the data do not allow the test
+ */
+export async function startAnalysis(access: Access, request: PlanRequest): Promise<Started> {
+	const materials = await materialsOf(access, request);
+	const plan = completePlan(request, materials);
+	const decisions = decisionsFor(materials.run, await names.current(access));
+	const hash = analysisHash(plan, materials, decisions);
+	const held = await analyses.findByHash(access, hash);
+	const isDone = held !== null && held.deletedAt === null && !['stopped', 'failed'].includes(held.status);
+	if (isDone) return { id: held.id, status: held.status, remarks: [] };
+	refuseOpenRemarks(materials, plan);
+	const preview = await compute('preview', await computeArgument(plan, materials, decisions));
+	const { id, status, isNew } = await analyses.create(access, { plan, hash, decisions });
+	if (isNew) await enqueueAnalysis(id);
+	return { id, status, remarks: preview.remarks };
+}
+
+async function materialsOf(access: Access, { treeSet: treeSetId, overlapRun, covariates }: PlanRequest): Promise<Materials> {
+	const treeSet = await treeSets.find(access, treeSetId);
+	if (treeSet === null) throw notInStudy('tree set', treeSetId);
+	const run = await overlapRuns.find(access, overlapRun);
+	if (run === null) throw notInStudy('overlap run', overlapRun);
+	if (covariates[0] !== undefined) throw notInStudy('covariate', covariates[0]);
+	return { treeSet, run };
+}
+
+function notInStudy(what: string, id: string): Refusal {
+	return new Refusal(404, 'not-found', `Expected the id of a ${what} of this study; “${id}” is none, or it was deleted.`);
+}
+
+/** The plan as it is stored: every default written out, the seed drawn. */
+function completePlan(request: PlanRequest, { treeSet }: Materials): Plan {
+	refuseLater(request);
+	const tree = request.tree ?? (treeSet.treeCount === 1 ? 0 : 'all');
+	if (tree === 'all' && treeSet.treeCount > 1) throw chooseATree(treeSet.treeCount);
+	const index = tree === 'all' ? 0 : tree;
+	if (index >= treeSet.treeCount) throw noSuchTree(index, treeSet.treeCount);
+	return { ...request, tree: index, seed: request.seed ?? randomInt(SEED_LIMIT + 1) };
+}
+
+function chooseATree(count: number): Refusal {
+	return new Refusal(
+		422,
+		'choose-a-tree',
+		`This tree set holds ${count} trees. Choose one: give \`tree\` as a number from 0 to ${count - 1}; testing all of them at once is not offered yet.`
+	);
+}
+
+export function noSuchTree(index: number, count: number): Refusal {
+	return new Refusal(
+		422,
+		'no-such-tree',
+		`Expected \`tree\` to be from 0 to ${count - 1}; got ${index}. The set holds ${count}.`
+	);
+}
+
+/** A block that would be missing from the result is refused, so that nobody takes its absence for an answer. */
+function refuseLater({ clades, signal, robustness }: PlanRequest): void {
+	const asked = Object.entries({ clades, signal, robustness }).find(([, value]) => value !== null);
+	if (asked === undefined) return;
+	throw new Refusal(
+		422,
+		'not-offered-yet',
+		`\`${asked[0]}\` is not offered yet. Leave it out, or give null, to run the rest of the plan.`
+	);
+}
+
+/** What is open about the matrix and the tree is listed at once, so that nobody settles one thing to meet the next. */
+function refuseOpenRemarks({ treeSet, run }: Materials, { tree }: Plan): void {
+	// A set keeps the remarks of its first tree; those of another are found when it is read.
+	const ofTree = tree === 0 ? treeSet.remarks : [];
+	const open = [...ofTree, ...run.remarks].filter((remark) => remark.level === 'settle');
+	const first = open[0];
+	if (first === undefined) return;
+	const more = open.length > 1 ? ` (${open.length - 1} more: see \`remarks\`)` : '';
+	throw new Refusal(422, first.code, `Something must be settled before this can be tested: ${first.message}${more}`, {
+		remarks: open
+	});
+}

@@ -1,0 +1,81 @@
+import { getTableColumns, sql } from 'drizzle-orm';
+import type { AnalysisProgress, AnalysisResult, FindingKind } from '#lib/contracts/analysisResult.ts';
+import type { AnalysisStatus } from '#lib/contracts/materials.ts';
+import type { Plan } from '#lib/contracts/plan.ts';
+import { analyses } from '#lib/server/db/schema.ts';
+
+export type AnalysisFailure = { readonly code: string; readonly message: string; readonly reference?: string };
+export type UsedDecision = { readonly from: string; readonly to: string | null; readonly why?: string };
+
+/** An analysis without what is long: what lists show. */
+export type ListedAnalysis = {
+	readonly id: string;
+	readonly studyId: string;
+	readonly treeSetId: string;
+	readonly overlapRunId: string;
+	readonly plan: Plan;
+	readonly hash: string;
+	readonly decisions: readonly UsedDecision[];
+	readonly status: AnalysisStatus;
+	readonly failure: AnalysisFailure | null;
+	/** the few numbers of a finished analysis that a line of a list holds */
+	readonly headline: Headline | null;
+	readonly createdBy: string;
+	readonly createdAt: string;
+	readonly startedAt: string | null;
+	readonly finishedAt: string | null;
+	readonly deletedAt: string | null;
+};
+
+export type Headline = {
+	readonly species: number;
+	readonly slope: number;
+	readonly p: number;
+	readonly kind: FindingKind;
+	readonly title: string;
+};
+
+export type Analysis = Omit<ListedAnalysis, 'headline'> & {
+	readonly progress: AnalysisProgress | null;
+	/** there when, and only when, it has finished */
+	readonly result: AnalysisResult | null;
+};
+
+type Row = typeof analyses.$inferSelect;
+type ListedRow = Omit<Row, 'result' | 'progress'> & { headline: Headline | null };
+
+const { result: _result, progress: _progress, ...short } = getTableColumns(analyses);
+export const listedColumns = {
+	...short,
+	headline: sql<Headline | null>`case when ${analyses.result} is null then null else jsonb_build_object(
+		'species', ${analyses.result}->'species',
+		'slope', ${analyses.result}->'regression'->'slope',
+		'p', ${analyses.result}->'permutation'->'p',
+		'kind', ${analyses.result}->'finding'->'kind',
+		'title', ${analyses.result}->'finding'->'title'
+	) end`
+};
+
+export function listedAnalysis(row: ListedRow): ListedAnalysis {
+	const { declaredAt: _declared, heartbeatAt: _heartbeat, ...rest } = row;
+	return { ...rest, ...timesOf(row) };
+}
+
+export function analysisFromRow(row: Row): Analysis {
+	const { declaredAt: _declared, heartbeatAt: _heartbeat, ...rest } = row;
+	return { ...rest, ...timesOf(row) };
+}
+
+function timesOf({
+	createdAt,
+	startedAt,
+	finishedAt,
+	deletedAt
+}: Pick<Row, 'createdAt' | 'startedAt' | 'finishedAt' | 'deletedAt'>) {
+	return {
+		createdAt: createdAt.toISOString(),
+		startedAt: startedAt?.toISOString() ?? null,
+		finishedAt: finishedAt?.toISOString() ?? null,
+		deletedAt: deletedAt?.toISOString() ?? null
+	};
+}

@@ -1,0 +1,66 @@
+import { and, eq, isNull } from 'drizzle-orm';
+import type { Access } from '#lib/server/access.ts';
+import { db } from '#lib/server/db/client.ts';
+import { overlapRuns, treeSets } from '#lib/server/db/schema.ts';
+import { analysisHash, decisionsFor } from './analysisInputs.ts';
+import type { ListedAnalysis } from './analysisRows.ts';
+import { canonicalJson } from './analysisHash.ts';
+import * as names from './names.ts';
+import * as runs from './overlapRuns.ts';
+import * as trees from './treeSets.ts';
+import { within } from './scope.ts';
+
+/** What has changed since an analysis was asked for. The result stays as it is; the person may want to run it again. */
+export type Change = {
+	readonly code:
+		| 'tree-set-replaced'
+		| 'tree-set-deleted'
+		| 'overlap-run-replaced'
+		| 'overlap-run-deleted'
+		| 'material-read-again'
+		| 'names-changed';
+	readonly message: string;
+};
+
+type Used = Pick<ListedAnalysis, 'treeSetId' | 'overlapRunId' | 'plan' | 'hash' | 'decisions'>;
+
+/** Empty when everything it used still stands. */
+export async function outOfDate(access: Access, analysis: Used): Promise<Change[]> {
+	const treeSet = await trees.findKept(access, analysis.treeSetId);
+	const run = await runs.findKept(access, analysis.overlapRunId);
+	if (treeSet === null || run === null) throw new Error('Expected the materials of the analysis; one is not there.');
+	const changes: Change[] = [];
+	if (treeSet.deletedAt !== null) changes.push(await lostTreeSet(access, treeSet));
+	if (run.deletedAt !== null) changes.push(await lostRun(access, run));
+	if (analysisHash(analysis.plan, { treeSet, run }, analysis.decisions) !== analysis.hash) {
+		changes.push({
+			code: 'material-read-again',
+			message: 'A remark about the tree or the matrix was settled in another way since.'
+		});
+	}
+	const decisions = decisionsFor(run, await names.current(access));
+	if (canonicalJson(decisions) !== canonicalJson(analysis.decisions)) {
+		changes.push({ code: 'names-changed', message: 'Decisions about names have changed since.' });
+	}
+	return changes;
+}
+
+async function lostTreeSet(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
+	const newer = await db()
+		.select({ label: treeSets.label })
+		.from(treeSets)
+		.where(and(within(access, treeSets.studyId), eq(treeSets.replaces, id), isNull(treeSets.deletedAt)));
+	return newer[0] === undefined
+		? { code: 'tree-set-deleted', message: `The tree set “${label}” was deleted since.` }
+		: { code: 'tree-set-replaced', message: `The tree set “${label}” was replaced by “${newer[0].label}” since.` };
+}
+
+async function lostRun(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
+	const newer = await db()
+		.select({ label: overlapRuns.label })
+		.from(overlapRuns)
+		.where(and(within(access, overlapRuns.studyId), eq(overlapRuns.replaces, id), isNull(overlapRuns.deletedAt)));
+	return newer[0] === undefined
+		? { code: 'overlap-run-deleted', message: `The overlap run “${label}” was deleted since.` }
+		: { code: 'overlap-run-replaced', message: `The overlap run “${label}” was replaced by “${newer[0].label}” since.` };
+}
