@@ -1,0 +1,94 @@
+import type { BlockSums } from './blockSums.ts';
+import { type Functional, PERMUTATION_STATISTICS, type PermutationStatistic, weightedSum } from './permutationDesign.ts';
+
+/** Arrangements at least as extreme as the observed one in each tail; ties count in both. */
+export type TailCounts = { readonly less: number; readonly greater: number };
+
+/** What a run of arrangements left behind. Tallies of neighbouring runs join without loss. */
+export type Tally = {
+	/** chunk (or batch of an enumeration) with which the run began */
+	readonly firstChunk: number;
+	readonly arrangements: number;
+	readonly counts: Readonly<Partial<Record<PermutationStatistic, TailCounts>>>;
+	/** shape (arrangements,) each: the values of the statistics kept, in the order of the stream */
+	readonly values: Readonly<Partial<Record<PermutationStatistic, Float64Array>>>;
+};
+
+/** One statistic being counted. */
+export type Counter = {
+	readonly functional: Functional;
+	readonly values: Float64Array | null;
+	less: number;
+	greater: number;
+};
+
+export function newCounters(
+	functionals: readonly Functional[],
+	arrangements: number,
+	keep: readonly PermutationStatistic[]
+): Counter[] {
+	return functionals.map((functional) => ({
+		functional,
+		values: keep.includes(functional.statistic) ? new Float64Array(arrangements) : null,
+		less: 0,
+		greater: 0
+	}));
+}
+
+/** Judges one arrangement: its index among those of the run, and its sums by node. */
+export function countInPlace(counters: readonly Counter[], sums: BlockSums, index: number): void {
+	for (const counter of counters) {
+		const { weights, source, observed, tie } = counter.functional;
+		const value = weightedSum(weights, sums[source]);
+		if (value <= observed + tie) counter.less++;
+		if (value >= observed - tie) counter.greater++;
+		if (counter.values) counter.values[index] = value;
+	}
+}
+
+export function tallyOf(counters: readonly Counter[], firstChunk: number, arrangements: number): Tally {
+	const counts: Partial<Record<PermutationStatistic, TailCounts>> = {};
+	const values: Partial<Record<PermutationStatistic, Float64Array>> = {};
+	for (const { functional, less, greater, values: kept } of counters) {
+		counts[functional.statistic] = { less, greater };
+		if (kept) values[functional.statistic] = kept.length === arrangements ? kept : kept.slice(0, arrangements);
+	}
+	return { firstChunk, arrangements, counts, values };
+}
+
+/** Counts added up, statistic by statistic. */
+export function addCounts(tallies: readonly Pick<Tally, 'counts'>[]): Tally['counts'] {
+	const sums: Partial<Record<PermutationStatistic, TailCounts>> = {};
+	for (const { counts } of tallies) {
+		for (const statistic of statisticsOf(counts)) {
+			const { less = 0, greater = 0 } = counts[statistic] ?? {};
+			const before = sums[statistic] ?? { less: 0, greater: 0 };
+			sums[statistic] = { less: before.less + less, greater: before.greater + greater };
+		}
+	}
+	return sums;
+}
+
+/**
+ * Joins the tallies of one question, whoever ran them and in whatever order they came: counts add, values line up by
+ * chunk. So any division of the chunks among workers gives the same bits.
+ */
+export function mergeTallies(tallies: readonly Tally[]): Tally {
+	const ordered = [...tallies].sort((a, b) => a.firstChunk - b.firstChunk);
+	const arrangements = ordered.reduce((sum, tally) => sum + tally.arrangements, 0);
+	const values: Partial<Record<PermutationStatistic, Float64Array>> = {};
+	for (const statistic of statisticsOf(ordered[0]?.values ?? {})) {
+		const joined = new Float64Array(arrangements);
+		let from = 0;
+		for (const tally of ordered) {
+			joined.set(tally.values[statistic] ?? [], from);
+			from += tally.arrangements;
+		}
+		values[statistic] = joined;
+	}
+	return { firstChunk: ordered[0]?.firstChunk ?? 0, arrangements, counts: addCounts(ordered), values };
+}
+
+function statisticsOf(record: Readonly<Partial<Record<PermutationStatistic, unknown>>>): PermutationStatistic[] {
+	return PERMUTATION_STATISTICS.filter((statistic) => record[statistic] !== undefined);
+}
