@@ -22,7 +22,8 @@ export function selectSpecies(matrix: PairMatrix, species: readonly string[]): P
 	const position = new Map(matrix.species.map((name, index) => [name, index]));
 	const rows = species.map((name) => {
 		const row = position.get(name);
-		if (row === undefined) throw new InputError('unknown-species', `Expected "${name}" to be a species of the matrix; it is not there.`, { name });
+		if (row === undefined)
+			throw new InputError('unknown-species', `Expected "${name}" to be a species of the matrix; it is not there.`, { name });
 		return row;
 	});
 	const values = new Float64Array(rows.length * rows.length);

@@ -1,0 +1,85 @@
+import { InputError } from '#lib/remarks/inputError.ts';
+import { refuseRepeats, refuseTooMany, type MatrixEntries } from './matrixEntries.ts';
+import type { MatrixOptions, MatrixReading } from './matrixReading.ts';
+import { isPairList, pairEntries } from './pairLayout.ts';
+import { readCells } from './readCells.ts';
+import { readNumbers } from './readNumbers.ts';
+import { readText } from './readText.ts';
+import { settleMatrix } from './settleMatrix.ts';
+import { squareEntries } from './squareLayout.ts';
+
+/**
+ * Reads a species-by-species matrix from text: a full square, one half with or without its diagonal, or a list of pairs;
+ * cells separated by commas, semicolons or tabs; decimal points, or decimal commas where commas do not separate cells.
+ *
+ * Whatever can be read is delivered as similarities with the best guess applied; each guess that changes values is a
+ * `settle` remark until `options.confirm` answers it. Rows and columns are matched by name, never by position, when
+ * both are named.
+ *
+ * @param source - the text, or the bytes of a file in UTF-8, UTF-16 or Windows-1252
+ * @param options - the measure and what a person has confirmed
+ * @throws {InputError} when the text is no matrix; codes in the files that check: `readText`, `readCells`,
+ * `squareLayout`, `pairLayout`, `readNumbers`, `settleMatrix`
+ */
+export function readMatrix(source: string | Uint8Array, options: MatrixOptions): MatrixReading {
+	const decoded = readText(source);
+	const { separator, rows } = readCells(decoded.text);
+	const isList = isPairList(rows);
+	const layout = isList ? pairEntries(rows) : { ...squareEntries(rows), valueHeader: '' };
+	const numbers = readNumbers(layout.entries, separator);
+	const settled = settleMatrix(numbers.entries, { isPairList: isList, valueHeader: layout.valueHeader }, options);
+	return {
+		...settled,
+		separator,
+		decimal: numbers.decimal,
+		remarks: [...decoded.remarks, ...layout.remarks, ...settled.remarks]
+	};
+}
+
+/** A matrix as a program sends it: one row of values for each species, in the same order; null is missing. */
+export type MatrixBody = { readonly species: readonly string[]; readonly values: readonly (readonly (number | null)[])[] };
+
+/**
+ * The same reading and the same checks as `readMatrix`, for a matrix that comes as numbers.
+ *
+ * @throws {InputError} `ragged-rows` unless `values` is square, `not-a-number` on infinity or NaN, `duplicate-species`,
+ * `unnamed-species`, `too-many-species`, and all of `settleMatrix`
+ */
+export function matrixFromBody({ species, values }: MatrixBody, options: MatrixOptions): MatrixReading {
+	refuseTooMany(species.length);
+	const names = species.map((name) => name.trim());
+	refuseRepeats(names, (index) => `position ${index + 1} of the species`);
+	refuseUnsquare(names, values);
+	const settled = settleMatrix(bodyEntries(names, values), { isPairList: false, valueHeader: '' }, options);
+	return { ...settled, separator: null, decimal: null };
+}
+
+function refuseUnsquare(names: readonly string[], values: MatrixBody['values']): void {
+	const n = names.length;
+	if (values.length !== n) {
+		throw new InputError('ragged-rows', `Expected ${n} rows of values, one for each species; got ${values.length}.`);
+	}
+	for (const [i, row] of values.entries()) {
+		const name = names[i] ?? '';
+		if (row.length !== n)
+			throw new InputError('ragged-rows', `Row “${name}”: expected ${n} values; got ${row.length}.`, { name });
+	}
+}
+
+function bodyEntries(species: readonly string[], values: MatrixBody['values']): MatrixEntries {
+	const [from, to, kept]: [number[], number[], number[]] = [[], [], []];
+	for (const [i, row] of values.entries()) {
+		for (const [j, value] of row.entries()) {
+			if (value === null) continue;
+			if (!Number.isFinite(value)) {
+				const [name = '', otherName = ''] = [species[i], species[j]];
+				const message = `Row “${name}”, column “${otherName}”: ${value} is not a number. Send null for a missing value.`;
+				throw new InputError('not-a-number', message, { name, otherName });
+			}
+			from.push(i);
+			to.push(j);
+			kept.push(value);
+		}
+	}
+	return { species, from, to, line: [], column: [], value: Float64Array.from(kept) };
+}

@@ -1,0 +1,34 @@
+import { InputError } from '#lib/remarks/inputError.ts';
+import { cellNumber, decimalOf } from './cellNumber.ts';
+import { entryPlace, type MatrixEntries, type TextEntries } from './matrixEntries.ts';
+import type { Decimal, Separator } from './matrixReading.ts';
+
+/**
+ * The cells as numbers, with the decimal sign most of them use.
+ * @throws {InputError} `not-a-number` with the first offending cell and how many there are
+ */
+export function readNumbers(entries: TextEntries, separator: Separator): { entries: MatrixEntries; decimal: Decimal } {
+	const decimal = decimalOf(entries.text, separator === ',');
+	const value = Float64Array.from(entries.text, (cell) => cellNumber(cell, decimal));
+	const first = value.findIndex((number) => !Number.isFinite(number));
+	if (first !== -1) {
+		const count = value.reduce((sum, number) => sum + (Number.isFinite(number) ? 0 : 1), 0);
+		const { said, where } = entryPlace(entries, first);
+		const text = entries.text[first] ?? '';
+		const others = count === 1 ? '' : ` It is the first of ${count} such cells.`;
+		throw new InputError('not-a-number', `${said}: “${text}” is not a number.${numberHint(text, separator)}${others}`, where);
+	}
+	const { species, from, to, line, column } = entries;
+	return { entries: { species, from, to, line, column, value }, decimal };
+}
+
+function numberHint(text: string, separator: Separator): string {
+	if (/^[+-]?\d*,\d+$/.test(text)) {
+		return separator === ','
+			? ' With decimal commas, separate the cells by semicolons or tabs.'
+			: ' Other cells have decimal points: use one decimal sign throughout.';
+	}
+	if (/^[+-]?\d*\.\d+$/.test(text)) return ' Other cells have decimal commas: use one decimal sign throughout.';
+	if (/%$/.test(text)) return ' Write percentages without the sign.';
+	return ' Leave a missing value blank or write NA.';
+}
