@@ -1,0 +1,35 @@
+import { defineConfig } from '@playwright/test';
+
+const port = 4319;
+
+export default defineConfig({
+	testDir: 'tests/e2e',
+	timeout: 90_000,
+	expect: { timeout: 15_000 },
+	fullyParallel: false,
+	workers: 1,
+	retries: 0,
+	reporter: [['list']],
+	use: {
+		baseURL: `http://127.0.0.1:${port}`,
+		launchOptions: {
+			executablePath: process.env.CHROMIUM_PATH ?? '/usr/bin/chromium',
+			args: [
+				'--no-sandbox',
+				'--disable-gpu',
+				'--disable-quic',
+				'--no-first-run',
+				'--disable-background-networking',
+				'--disable-component-update',
+				'--disable-sync'
+			]
+		}
+	},
+	webServer: {
+		command: 'node build/commands/demo.mjs',
+		url: `http://127.0.0.1:${port}/health`,
+		timeout: 120_000,
+		env: { PORT: String(port), HOST: '127.0.0.1', KITHLINE_DATA: 'test-results/data-browser' },
+		gracefulShutdown: { signal: 'SIGTERM', timeout: 8_000 }
+	}
+});
