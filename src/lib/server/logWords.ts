@@ -1,0 +1,66 @@
+import type { LogDetail, LoggedAction } from './repositories/logBook.ts';
+
+/** What somebody did, after their name: “I. Lead made the study”. */
+const WORDS: Readonly<Record<LoggedAction, string>> = {
+	'account-registered': 'registered',
+	'account-renamed': 'changed their name',
+	'passphrase-changed': 'changed their passphrase',
+	'passphrase-reset': 'got a new passphrase from the command line',
+	'signed-in': 'signed in',
+	'sign-in-refused': 'was refused at sign-in',
+	'signed-out': 'signed out',
+	'signed-out-everywhere': 'signed out everywhere',
+	'access-refused': 'was refused',
+	'token-made': 'made a token',
+	'token-revoked': 'revoked a token',
+	'lab-created': 'made the lab',
+	'member-added': 'joined the lab',
+	'member-role-changed': 'changed the role of a member',
+	'member-removed': 'removed a member',
+	'study-created': 'made the study',
+	'study-changed': 'changed title or question of the study',
+	'study-renamed': 'renamed the study',
+	'study-copied': 'copied a study into',
+	'study-deleted': 'deleted the study',
+	'study-restored': 'brought back the study',
+	'tree-set-created': 'kept the tree set',
+	'tree-set-renamed': 'renamed the tree set',
+	'tree-set-replaced': 'replaced an older tree set by',
+	'tree-set-deleted': 'deleted a tree set',
+	'tree-set-restored': 'brought back a tree set',
+	'tree-spread-accepted': 'accepted that the tips be levelled',
+	'overlap-run-created': 'kept the overlap run',
+	'overlap-run-renamed': 'renamed the overlap run',
+	'overlap-run-replaced': 'replaced an older overlap run by',
+	'overlap-run-deleted': 'deleted an overlap run',
+	'overlap-run-restored': 'brought back an overlap run',
+	'name-decided': 'decided about names',
+	'name-withdrawn': 'withdrew decisions about names',
+	'analysis-created': 'asked for an analysis',
+	'analysis-run-again': 'asked for an analysis again',
+	'analysis-finished': 'finished an analysis',
+	'analysis-stopped': 'stopped an analysis',
+	'analysis-failed': 'could not finish an analysis',
+	'analysis-deleted': 'deleted an analysis',
+	'analysis-restored': 'brought back an analysis',
+	'report-created': 'saved the report',
+	'report-changed': 'changed a report',
+	'report-deleted': 'deleted a report',
+	'report-restored': 'brought back a report',
+	'report-signed-off': 'signed off a report',
+	'report-unlocked': 'unlocked a report',
+	exported: 'downloaded a file'
+};
+
+/** A line of the log book in words; names the thing when the entry does. */
+export function logWords(action: string, detail: LogDetail): string {
+	// The column holds text, so an entry of an older version may have an action this one does not know.
+	const words = action in WORDS ? WORDS[action as LoggedAction] : action.replaceAll('-', ' ');
+	const named = detail['label'] ?? detail['title'];
+	if (action === 'name-decided' || action === 'name-withdrawn') return `${words}${countOf(detail['decisions'])}`;
+	return typeof named === 'string' && named !== '' ? `${words} “${named}”` : words;
+}
+
+function countOf(decisions: unknown): string {
+	return Array.isArray(decisions) ? ` (${decisions.length})` : '';
+}
