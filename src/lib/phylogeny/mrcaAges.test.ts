@@ -3,7 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { mrcaAges, mrcaNodes } from './mrcaAges.ts';
 import { parseNewick } from './newick.ts';
 import { nodeAges } from './nodeAges.ts';
-import { nestedText, nestedTrees } from './treeArbitrary.ts';
+import { nestedText, nestedTrees } from '../../../tests/reference/nestedTrees.ts';
 import { type Tree, tipIndices } from './tree.ts';
 
 function only(text: string): Tree {

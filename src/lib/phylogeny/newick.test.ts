@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { parseNewick } from './newick.ts';
-import { nestedArrays, nestedText, nestedTrees } from './treeArbitrary.ts';
+import { nestedArrays, nestedText, nestedTrees } from '../../../tests/reference/nestedTrees.ts';
 import { type Tree, tipLabels } from './tree.ts';
 
 function only(text: string): Tree {

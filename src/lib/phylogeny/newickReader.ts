@@ -77,8 +77,6 @@ export class NewickReader {
 				`Expected at most ${NODE_LIMIT.toLocaleString('en')} nodes in a tree; the next begins at {place}.`
 			);
 		this.open = buffer.add(this.open, scanner.start);
-		buffer.label.push('');
-		buffer.labelRaw.push('');
 		if (scanner.metaComments.length > 0) this.takeMetaComments(this.open);
 		return scanner.next();
 	}
@@ -98,8 +96,8 @@ export class NewickReader {
 		if (lastMet.tree === this.treeCount) this.failDuplicate(label, lastMet.at, start);
 		lastMet.tree = this.treeCount;
 		lastMet.at = start;
-		buffer.label.push(label);
-		buffer.labelRaw.push(labelRaw);
+		buffer.label[node] = label;
+		buffer.labelRaw[node] = labelRaw;
 		this.node = node;
 		this.hasLabel = true;
 		this.hasLength = false;

@@ -4,7 +4,7 @@ import { mrcaAges } from './mrcaAges.ts';
 import { parseNewick } from './newick.ts';
 import { nodeAges } from './nodeAges.ts';
 import { pruneTree } from './pruneTree.ts';
-import { nestedText, nestedTrees } from './treeArbitrary.ts';
+import { nestedText, nestedTrees } from '../../../tests/reference/nestedTrees.ts';
 import { type Tree, tipIndices, tipLabels } from './tree.ts';
 import { levelTips } from './ultrametric.ts';
 import { writeNewick } from './writeNewick.ts';

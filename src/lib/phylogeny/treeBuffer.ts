@@ -10,14 +10,13 @@ export class TreeBuffer {
 	/** offset in the text where the node begins */
 	start = new Int32Array(256);
 	length = new Float64Array(256);
-	label: string[] = [];
-	labelRaw: string[] = [];
+	/** used again too: what stands past `count` is of an earlier tree */
+	readonly label: string[] = [];
+	readonly labelRaw: string[] = [];
 	private annotations = new Map<number, Record<string, string>>();
 
 	clear(): void {
 		this.count = 0;
-		this.label = [];
-		this.labelRaw = [];
 		if (this.annotations.size > 0) this.annotations = new Map();
 	}
 
@@ -30,6 +29,7 @@ export class TreeBuffer {
 		this.childCount[node] = 0;
 		this.start[node] = start;
 		this.length[node] = NaN;
+		this.label[node] = this.labelRaw[node] = '';
 		if (parent >= 0) this.childCount[parent] = (this.childCount[parent] ?? 0) + 1;
 		return node;
 	}
@@ -39,14 +39,15 @@ export class TreeBuffer {
 		this.annotations.set(node, Object.fromEntries([...Object.entries(known), ...entries]));
 	}
 
-	/** A tree of its own: later use of the buffer leaves it alone. */
+	/** A tree of its own: later use of the buffer leaves it alone, and each array has its own memory, ready to be transferred. */
 	toTree(): Tree {
+		const { count } = this;
 		return {
-			parent: this.parent.slice(0, this.count),
-			length: this.length.slice(0, this.count),
-			childCount: this.childCount.slice(0, this.count),
-			label: this.label,
-			labelRaw: this.labelRaw,
+			parent: this.parent.slice(0, count),
+			length: this.length.slice(0, count),
+			childCount: this.childCount.slice(0, count),
+			label: this.label.slice(0, count),
+			labelRaw: this.labelRaw.slice(0, count),
 			annotations: this.annotations.size === 0 ? NO_ANNOTATIONS : this.annotations
 		};
 	}

@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { parseNewick } from './newick.ts';
 import { nodeAges, nodeDepths } from './nodeAges.ts';
-import { nestedText, nestedTrees } from './treeArbitrary.ts';
+import { nestedText, nestedTrees } from '../../../tests/reference/nestedTrees.ts';
 import { type Tree, tipIndices } from './tree.ts';
 import { levelTips, tipSpread, ultrametricRemark, ultrametricSpread } from './ultrametric.ts';
 

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { parseNewick } from './newick.ts';
-import { nestedText, nestedTrees } from './treeArbitrary.ts';
+import { nestedText, nestedTrees } from '../../../tests/reference/nestedTrees.ts';
 import { type Tree, tipIndices } from './tree.ts';
 import { writeNewick } from './writeNewick.ts';
 

@@ -1,5 +1,5 @@
 import fc from 'fast-check';
-import type { Tree } from './tree.ts';
+import type { Tree } from '#lib/phylogeny/tree.ts';
 
 /** A tree as nested objects: the shape tests think in, built without any of the code they test. */
 export type NestedTree = { readonly label: string; readonly length: number; readonly children: readonly NestedTree[] };
