@@ -1,4 +1,4 @@
-import { linkSync, mkdirSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
+import { linkSync, mkdirSync, readFileSync, readdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { randomUUID } from 'node:crypto';
 import { hostname } from 'node:os';
 import { join } from 'node:path';
@@ -9,6 +9,10 @@ import { z } from 'zod';
  * So whoever opens a data folder first takes this lock, a file created exclusively that names its holder.
  */
 const LOCK_FILE = 'lock.json';
+/** begins the names of locks that are being moved out of the way */
+const ASIDE = 'lock-stale-';
+/** far longer than moving a file takes */
+const SETTLE_MS = 100;
 
 const holderSchema = z.object({
 	pid: z.number().int().positive(),
@@ -53,6 +57,7 @@ export function takeLock(folder: string, command: string): Lock {
 		takeOver(path, holder, folder);
 		if (!create(path, mine)) throw new LockedError(sentence(folder, readHolder(path)));
 	}
+	confirm(path, folder, mine);
 	return held(path, folder, mine);
 }
 
@@ -85,7 +90,7 @@ function create(path: string, holder: Holder): boolean {
  * one has just taken: so what was moved is read again, and put back when it is not the stale one.
  */
 function takeOver(path: string, stale: Holder | null, folder: string): void {
-	const aside = join(folder, `lock-stale-${randomUUID()}.json`);
+	const aside = join(folder, `${ASIDE}${randomUUID()}.json`);
 	try {
 		renameSync(path, aside);
 	} catch {
@@ -97,6 +102,14 @@ function takeOver(path: string, stale: Holder | null, folder: string): void {
 		throw new LockedError(sentence(folder, moved));
 	}
 	rmSync(aside, { force: true });
+}
+
+/** While somebody else moves a lock aside, a third could slip in and be overwritten when it is put back: so look again. */
+function confirm(path: string, folder: string, mine: Holder): void {
+	if (!readdirSync(folder).some((name) => name.startsWith(ASIDE))) return;
+	Atomics.wait(new Int32Array(new SharedArrayBuffer(4)), 0, 0, SETTLE_MS);
+	const holder = readHolder(path);
+	if (holder?.key !== mine.key) throw new LockedError(sentence(folder, holder));
 }
 
 /** Null when there is no lock, or it cannot be read. */

@@ -16,6 +16,8 @@ export type RuntimeOptions = Pick<Environment, 'dataFolder' | 'databaseUrl' | 'a
 	/** named to a second process that wants the same folder */
 	readonly command: string;
 	readonly isDemo?: boolean;
+	/** takes analyses from the queue; a command of a moment does not */
+	readonly works?: boolean;
 	/** the code of the compute threads, for tests of the queue */
 	readonly computeFile?: string;
 	/** where the worker finds its inputs, for tests of the queue */
@@ -37,7 +39,7 @@ export async function openRuntime(options: RuntimeOptions): Promise<Runtime> {
 		const runtime = await openParts(options, steps);
 		holdRuntime(runtime);
 		// In the embedded database this process is the only one, so whatever stands as working was interrupted.
-		await runtime.worker.recover({ all: runtime.database.kind === 'embedded' });
+		if (options.works ?? true) await runtime.worker.recover({ all: runtime.database.kind === 'embedded' });
 		return runtime;
 	} catch (cause) {
 		await closeAll(steps);
@@ -67,7 +69,8 @@ async function openParts(options: RuntimeOptions, steps: Closing[]): Promise<Run
 	steps.unshift(pool.close);
 	const progress = new EventEmitter().setMaxListeners(0);
 	// One thread stays free for readings and previews that somebody waits for.
-	const worker = openAnalysisWorker({ queue, store: options.store ?? analyses, progress, capacity: Math.max(1, threads - 1) });
+	const capacity = (options.works ?? true) ? Math.max(1, threads - 1) : 0;
+	const worker = openAnalysisWorker({ queue, store: options.store ?? analyses, progress, capacity });
 	steps.unshift(worker.close);
 	const isDemo = options.isDemo ?? false;
 	let closing: Promise<void> | null = null;
