@@ -1,0 +1,113 @@
+import type { AnalysisProgress, AnalysisResult } from '#lib/contracts/analysisResult.ts';
+import type { AnalysisInputs } from '#lib/contracts/compute.ts';
+import type { Plan } from '#lib/contracts/plan.ts';
+import { crownNode } from '#lib/phylogeny/nodeAges.ts';
+import { polytomies } from '#lib/phylogeny/treeShape.ts';
+import { ultrametricSpread } from '#lib/phylogeny/ultrametric.ts';
+import { mrcaAges } from '#lib/phylogeny/mrcaAges.ts';
+import { linearRegression, type LinearRegression } from '#lib/statistics/linearRegression.ts';
+import { mantel } from '#lib/statistics/mantel.ts';
+import { mantelMoments } from '#lib/statistics/mantelMoments.ts';
+import { nodeAverages } from '#lib/statistics/nodeAverages.ts';
+import { lowerTriangle } from '#lib/statistics/pairValues.ts';
+import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
+import { permutationTest } from '#lib/statistics/permutationTest.ts';
+import { findingOf } from './findingOf.ts';
+import { describePermutation } from './describePermutation.ts';
+import { nodeRows } from './nodeRows.ts';
+import { plateData } from './plateData.ts';
+import { prepareAnalysis, type PreparedAnalysis } from './prepareAnalysis.ts';
+import { progressReporter } from './progressReporter.ts';
+
+/** Changes whenever a published number could change; printed in every report. */
+export const ENGINE = { version: '1.0.0', kernel: 'typescript-blocks' } as const;
+
+export type Report = (progress: AnalysisProgress) => void;
+
+/**
+ * The whole analysis: a pure function of its inputs and its plan, which holds the seed. Equal arguments give equal bits.
+ *
+ * @param report - told after every chunk of shuffles; it may throw to stop
+ * @throws {InputError} with a sentence when the materials do not allow the analysis; see `prepareAnalysis`
+ */
+export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): AnalysisResult {
+	const prepared = prepareAnalysis(inputs, plan);
+	const { tree, ages, species, response } = prepared;
+	const pairAges = mrcaAges(tree, ages);
+	const lower = { ages: lowerTriangle(pairAges, species.length), overlaps: lowerTriangle(response, species.length) };
+	const line = pick(linearRegression(lower.ages, lower.overlaps));
+
+	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	const onProgress = report && progressReporter({ plan, regression: line, lower, report });
+	const outcome = permutationTest(design, {
+		permutations: plan.permutations,
+		seed: plan.seed,
+		...(onProgress ? { onProgress } : {})
+	});
+
+	const moments = mantelMoments(pairAges, response);
+	const averages = nodeAverages({ parent: tree.parent, ages }, response);
+	const compared = describeCompared(prepared, inputs, plan, lower.overlaps);
+	const mantelStatistics = mantel(lower.ages, lower.overlaps);
+	const permutation = describePermutation({ prepared, design, outcome, plan, moments, pairAges: lower.ages });
+	return {
+		compared,
+		species: species.length,
+		pairs: lower.ages.length,
+		dropped: [...prepared.dropped],
+		remarks: [...prepared.remarks],
+		regression: line,
+		permutation,
+		mantel: mantelStatistics,
+		nodeAverages: {
+			nodes: nodeRows(prepared, averages),
+			nested: { ...averages.nested, ...tails(outcome.free.statistics['nodes-nested']) },
+			plain: { ...averages.plain, ...tails(outcome.free.statistics['nodes-plain']) }
+		},
+		finding: findingOf({
+			compared,
+			permutation,
+			regression: line,
+			moments,
+			z: mantelStatistics.z,
+			ages,
+			parent: tree.parent,
+			species: species.length
+		}),
+		engine: { version: ENGINE.version, seed: plan.seed, kernel: ENGINE.kernel },
+		plate: plateData({ prepared, outcome, lower })
+	};
+}
+
+function describeCompared(
+	prepared: PreparedAnalysis,
+	inputs: AnalysisInputs,
+	plan: Plan,
+	overlaps: Float64Array
+): AnalysisResult['compared'] {
+	const { chosen, tree, ages } = prepared;
+	return {
+		measure: inputs.measure,
+		ageUnit: inputs.ageUnit,
+		tree: { index: chosen.index, name: chosen.name, treesInSet: chosen.treesInSet },
+		rootAge: ages[crownNode(tree)] ?? 0,
+		polytomies: polytomies(tree),
+		ultrametricSpread: ultrametricSpread(chosen.tree),
+		levelled: chosen.levelled,
+		meanOverlap: overlaps.reduce((sum, value) => sum + value, 0) / overlaps.length,
+		alternative: plan.alternative,
+		transform: plan.transform,
+		alpha: plan.alpha
+	};
+}
+
+function pick({ residualStandardDeviation, ...line }: LinearRegression): AnalysisResult['regression'] {
+	if (residualStandardDeviation === null) throw new Error('Four species or more give six pairs: the residuals have a spread.');
+	const { slope, intercept, r, rSquared } = line;
+	return { slope, intercept, r, rSquared, residualStandardDeviation };
+}
+
+function tails(tested: { pLess: number; pGreater: number; pTwoSided: number } | undefined) {
+	if (tested === undefined) throw new Error('Node averages are tested in every run.');
+	return { pLess: tested.pLess, pGreater: tested.pGreater, pTwoSided: tested.pTwoSided };
+}

@@ -1,0 +1,21 @@
+import type { ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
+import { analyse } from './analyse.ts';
+import { previewAnalysis } from './previewAnalysis.ts';
+import { pairAges, readTreeFacts, treeStructure } from './readTreeFacts.ts';
+
+type Handlers = {
+	readonly [Task in ComputeTask]: (
+		argument: ComputeTasks[Task]['argument'],
+		report?: (progress: ComputeProgress) => void
+	) => ComputeTasks[Task]['answer'];
+};
+
+/** What a compute thread can be asked: each task one call. */
+export const computeTasks: Handlers = {
+	readTrees: ({ text, confirm }) => readTreeFacts(text, confirm),
+	treeStructure: ({ text, tree, spreadConfirmed }) => treeStructure(text, tree, spreadConfirmed),
+	mrcaAges: ({ text, tree, spreadConfirmed, species }) =>
+		pairAges(text, tree, { spreadConfirmed, ...(species ? { species } : {}) }),
+	preview: ({ inputs, plan }) => previewAnalysis(inputs, plan),
+	analyse: ({ inputs, plan }, report) => analyse(inputs, plan, report)
+};

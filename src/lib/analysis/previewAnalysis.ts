@@ -1,0 +1,33 @@
+import type { AnalysisInputs, AnalysisPreview } from '#lib/contracts/compute.ts';
+import type { Plan } from '#lib/contracts/plan.ts';
+import { mrcaAges } from '#lib/phylogeny/mrcaAges.ts';
+import { crownNode } from '#lib/phylogeny/nodeAges.ts';
+import { distinctAges } from '#lib/statistics/distinctAges.ts';
+import { lowerTriangle } from '#lib/statistics/pairValues.ts';
+import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
+import { isExact } from '#lib/statistics/permutationTest.ts';
+import { smallestFreeP } from './attainable.ts';
+import { prepareAnalysis } from './prepareAnalysis.ts';
+
+/**
+ * What an analysis would use and could at best say, without running it.
+ * @throws {InputError} as `prepareAnalysis` and `preparePermutation`: exactly what would stop the analysis itself
+ */
+export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPreview {
+	const { tree, ages, species, response, dropped, remarks } = prepareAnalysis(inputs, plan);
+	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	const exact = isExact(design, false, plan.permutations);
+	const sides = plan.alternative === 'two-sided' ? 2 : 1;
+	return {
+		species,
+		dropped,
+		pairs: (species.length * (species.length - 1)) / 2,
+		distinctAges: distinctAges(lowerTriangle(mrcaAges(tree, ages), species.length)),
+		rootAge: ages[crownNode(tree)] ?? 0,
+		sides: design.sides,
+		rootPairShare: design.rootPairShare,
+		smallestP: Math.min(1, sides * smallestFreeP(tree, ages, design, { exact, shuffles: plan.permutations })),
+		exact,
+		remarks
+	};
+}
