@@ -1,0 +1,42 @@
+import { MEASURE_NAMES, type Measure } from '#lib/contracts/measure.ts';
+import type { Alternative } from '#lib/contracts/plan.ts';
+
+/** A stretch of the sentence; one with `href` leads to where that choice is made. */
+export type QuestionPart = { readonly text: string; readonly href?: string };
+
+export type QuestionFacts = {
+	readonly study: string;
+	/** species that tree and matrix share; null before both are there */
+	readonly sharedSpecies: number | null;
+	/** of the newest run; null before there is one */
+	readonly measure: Measure | null;
+	/** of the newest tree set; null before there is one */
+	readonly trees: { readonly kind: 'summary' | 'posterior'; readonly count: number } | null;
+	/** the direction that was asked last */
+	readonly alternative: Alternative;
+};
+
+const FALL: Readonly<Record<Alternative, string>> = { less: 'fall', greater: 'rise', 'two-sided': 'rise or fall' };
+
+/** The question of a study as one sentence, as far as its materials say it. */
+export function questionParts({ study, sharedSpecies, measure, trees, alternative }: QuestionFacts): QuestionPart[] {
+	const at = (page: string) => `/studies/${study}/${page}`;
+	const across: QuestionPart[] =
+		sharedSpecies === null
+			? [{ text: 'Does ' }]
+			: [
+					{ text: 'Across ' },
+					{ text: `${sharedSpecies.toLocaleString('en')} shared species`, href: at('names') },
+					{ text: ', does ' }
+				];
+	const overlap: QuestionPart =
+		measure === null ? { text: 'niche overlap' } : { text: MEASURE_NAMES[measure], href: at('overlaps') };
+	const fall = ` ${FALL[alternative]} with the age of the most recent common ancestor`;
+	if (trees === null) return [...across, overlap, { text: `${fall}?` }];
+	return [...across, overlap, { text: `${fall} on ` }, { text: treeWords(trees), href: at('materials') }, { text: '?' }];
+}
+
+export function treeWords({ kind, count }: NonNullable<QuestionFacts['trees']>): string {
+	if (count === 1) return kind === 'summary' ? 'the summary tree' : 'one posterior tree';
+	return `${count.toLocaleString('en')} ${kind === 'summary' ? 'trees' : 'posterior trees'}`;
+}

@@ -1,0 +1,94 @@
+import { InputError } from '#lib/remarks/inputError.ts';
+import type { Access } from '#lib/server/access.ts';
+import { compute } from '#lib/server/jobs/pool.ts';
+import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as names from '#lib/server/repositories/names.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import * as reports from '#lib/server/repositories/reports.ts';
+import * as texts from '#lib/server/repositories/texts.ts';
+import { treeInText, type TreeSet } from '#lib/server/repositories/treeSetRows.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { questionParts } from './questionParts.ts';
+import { tinyTree } from './tinyTree.ts';
+import { tinyWing } from './tinyWing.ts';
+
+/** Larger texts are not read again for the sake of a thumbnail; unit: tips in the text. */
+const DRAWN_UP_TO_TIPS = 20_000;
+const WINGS_SHOWN = 6;
+const LINES_SHOWN = 5;
+
+/** What the home of a study shows besides its margin. */
+export async function studyHome(access: Access, study: string) {
+	const trees = await treeSets.list(access);
+	const runs = await overlapRuns.list(access);
+	const asked = await analyses.list(access);
+	const saved = await reports.list(access);
+	const pairs = (await names.matching(access))?.pairs ?? null;
+	const [newestTree, newestRun, newestPlan] = [trees[0], runs[0], asked[0]?.plan];
+	const order = dataOrder(newestTree?.tips ?? [], pairs ?? []);
+	return {
+		asked: questionParts({
+			study,
+			sharedSpecies: pairs?.length ?? null,
+			measure: newestRun?.measure ?? null,
+			trees: newestTree === undefined ? null : { kind: newestTree.kind, count: newestTree.treeCount },
+			alternative: newestPlan?.alternative ?? 'less'
+		}),
+		trees: trees.map(treeFacts),
+		drawing: await drawnTree(trees),
+		runs: await Promise.all(runs.slice(0, WINGS_SHOWN).map(({ id, label }) => thumbnail(access, { id, label, order }))),
+		moreRuns: Math.max(0, runs.length - WINGS_SHOWN),
+		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
+		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
+		reports: saved.slice(0, LINES_SHOWN).map(({ id, title, author, changedAt }) => ({ id, title, author, changedAt }))
+	};
+}
+
+function treeFacts({ id, label, kind, treeCount, tipCount, rootAge, ageUnit, ultrametricSpread, polytomies }: TreeSet) {
+	return { id, label, kind, treeCount, tipCount, rootAge, ageUnit, ultrametricSpread, polytomies };
+}
+
+/** The newest summary tree as a path, else the newest tree; null when there is none or its text is long. */
+async function drawnTree(trees: readonly TreeSet[]): Promise<string | null> {
+	const short = trees.filter(({ tipCount, treeCount, rootAge }) => rootAge !== null && tipCount * treeCount <= DRAWN_UP_TO_TIPS);
+	const chosen = short.find(({ kind }) => kind === 'summary') ?? short[0];
+	if (chosen === undefined) return null;
+	const text = await texts.load(chosen.textHash);
+	const tree = treeInText(chosen.chosen, 0);
+	try {
+		return tinyTree(await compute('treeStructure', { text, tree, spreadConfirmed: chosen.spreadConfirmed }));
+	} catch (refused) {
+		// A tree that still needs a person, such as one whose tips end apart, is kept but has no ages to draw.
+		if (refused instanceof InputError) return null;
+		throw refused;
+	}
+}
+
+/** Names of the data in tree order. */
+function dataOrder(tips: readonly string[], pairs: readonly { readonly tip: string; readonly species: string }[]): string[] {
+	const nameOf = new Map(pairs.map(({ tip, species }) => [tip, species]));
+	return tips.map((tip) => nameOf.get(tip) ?? tip);
+}
+
+type Thumbnail = { id: string; label: string; order: readonly string[] };
+
+async function thumbnail(access: Access, { id, label, order }: Thumbnail) {
+	const run = await overlapRuns.find(access, id);
+	return { id, label, wing: run === null ? null : tinyWing(run, order) };
+}
+
+async function analysisLine(
+	access: Access,
+	{ id, status, headline, failure, plan, createdAt, finishedAt, treeSetId }: analyses.ListedAnalysis
+) {
+	const tree = await treeSets.findKept(access, treeSetId);
+	return {
+		id,
+		status,
+		headline,
+		failure: failure?.message ?? null,
+		floor: 1 / (plan.permutations + 1),
+		ageUnit: tree?.ageUnit ?? 'Ma',
+		at: finishedAt ?? createdAt
+	};
+}
