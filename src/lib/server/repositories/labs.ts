@@ -1,5 +1,4 @@
-import { and, asc, eq, sql, type SQL } from 'drizzle-orm';
-import type { PgColumn } from 'drizzle-orm/pg-core';
+import { and, asc, eq, sql } from 'drizzle-orm';
 import type { Role } from '#lib/contracts/user.ts';
 import { labOf, personOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
@@ -64,10 +63,4 @@ export async function findByName(name: string): Promise<string | null> {
 		.from(labs)
 		.where(and(eq(labs.name, name), eq(labs.personal, false)));
 	return row?.id ?? null;
-}
-
-/** Part of a query: the lab made for the person at registration, else the one they joined first. */
-export function ownLabOf(userId: PgColumn): SQL<string | null> {
-	return sql<string | null>`(select m.lab_id from memberships m join labs l on l.id = m.lab_id where m.user_id = ${userId}
-		order by l.personal desc, m.created_at limit 1)`;
 }

@@ -59,7 +59,7 @@ export async function sessionHolder(id: string): Promise<SessionHolder | null> {
 			email: users.email,
 			name: users.name,
 			sessionVersion: users.sessionVersion,
-			ownLab: labs.ownLabOf(users.id)
+			ownLab: labOfTheirOwn
 		})
 		.from(users)
 		.where(eq(users.id, id));
@@ -132,3 +132,7 @@ export async function hasDemoAccounts(): Promise<boolean> {
 }
 
 const nextVersion = sql`${users.sessionVersion} + 1`;
+
+/** The lab made at registration, else the one joined first. The column is named in full: the inner tables have an id as well. */
+const labOfTheirOwn = sql<string | null>`(select m.lab_id from memberships m join labs l on l.id = m.lab_id
+	where m.user_id = "users"."id" order by l.personal desc, m.created_at limit 1)`;
