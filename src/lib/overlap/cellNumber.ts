@@ -1,12 +1,14 @@
 import type { Decimal } from './matrixReading.ts';
 
 const MISSING = new Set(['', 'na', 'n/a', '#n/a', 'nan', 'null', '-', '–', '—']);
+const DIGIT = /\d/;
 const POINT_NUMBER = /^[+-]?(\d+\.?\d*|\.\d+)(e[+-]?\d+)?$/i;
 const COMMA_NUMBER = /^[+-]?(\d+,?\d*|,\d+)(e[+-]?\d+)?$/i;
 
 /** Whether a cell says that its value is missing: blank, NA, NaN or a dash. */
 export function isMissing(cell: string): boolean {
-	return cell.length <= 4 && MISSING.has(cell.toLowerCase());
+	const mayBe = cell.length <= 4 && !DIGIT.test(cell);
+	return mayBe && MISSING.has(cell.toLowerCase());
 }
 
 /** Whether a cell is a word: neither missing nor a number with a decimal point or comma. */
@@ -36,5 +38,5 @@ export function decimalOf(cells: readonly string[], commaSeparated: boolean): De
 
 /** Spreadsheets and typeset tables write U+2212 for minus. */
 function plainMinus(cell: string): string {
-	return cell.startsWith('\u2212') ? `-${cell.slice(1)}` : cell;
+	return cell.charCodeAt(0) === 0x2212 ? `-${cell.slice(1)}` : cell;
 }

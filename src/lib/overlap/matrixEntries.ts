@@ -8,12 +8,12 @@ import { SPECIES_LIMIT } from './matrixReading.ts';
  */
 export type EntryPlaces = {
 	readonly species: readonly string[];
-	readonly from: number[];
-	readonly to: number[];
-	readonly line: number[];
-	readonly column: number[];
+	readonly from: ArrayLike<number>;
+	readonly to: ArrayLike<number>;
+	readonly line: ArrayLike<number>;
+	readonly column: ArrayLike<number>;
 };
-export type TextEntries = EntryPlaces & { readonly text: string[] };
+export type TextEntries = EntryPlaces & { readonly text: readonly string[] };
 export type MatrixEntries = EntryPlaces & { readonly value: Float64Array };
 
 export type EntryPlace = { readonly said: string; readonly where: Place };

@@ -8,6 +8,11 @@ import type { CellRow } from './readCells.ts';
 const FIRST_NAME_HEADER = /^(species|taxon|sp|name|tip)[\s_.-]?(a|1|i|x)$/i;
 const VALUE_HEADERS = ['overlap', 'similarity', 'distance', 'dissimilarity', 'value', 'd', 'i'];
 
+type GrowingEntries = { readonly species: string[]; readonly text: string[] } & Record<
+	'from' | 'to' | 'line' | 'column',
+	number[]
+>;
+
 export type PairLayout = {
 	readonly entries: TextEntries;
 	/** the header of the column that was read, in lower case; '' without a header */
@@ -37,7 +42,7 @@ export function pairEntries(rows: readonly CellRow[]): PairLayout {
 	const column = headed ? valueColumn(first) : 2;
 	const valueHeader = headed ? (first.cells[column] ?? '') : '';
 	const index = new Map<string, number>();
-	const entries: TextEntries & { species: string[] } = { species: [], from: [], to: [], line: [], column: [], text: [] };
+	const entries: GrowingEntries = { species: [], from: [], to: [], line: [], column: [], text: [] };
 	const indexOf = (name: string): number => {
 		const known = index.get(name);
 		if (known !== undefined) return known;

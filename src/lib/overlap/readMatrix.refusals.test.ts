@@ -31,6 +31,11 @@ describe('readMatrix, refusals', () => {
 		['duplicate-species', 'x,A,B,A\nA,1,.5,.2\nB,.5,1,.3\nC,.2,.3,1', '“A” stands in column 2 and in column 4'],
 		['unnamed-species', 'x,A,B,C\nA,1,.5,.2\n,.5,1,.3\nC,.2,.3,1', 'line 3 has none'],
 		['unnamed-species', 'A,B,.5\nA,,.3\nB,C,.2\nA,C,.1', 'Line 2, column 2: expected a species name'],
+		[
+			'names-differ',
+			'x,s1,s2,s3\nA,1,.5,.2\nB,.5,1,.3\nC,.4,.2,.1',
+			'they share none (rows “A”, “B” and “C”; columns “s1”, “s2” and “s3”)'
+		],
 		['names-differ', 'x,A,B,C\nA,1,.5,.2\nB,.5,1,.3\nK,.2,.3,1', '“K” is only a row, “C” is only a column'],
 		['names-differ', 'x,A,B\nA,1,.5\nB,.5,1\nC,.2,.3\nE,.4,.2', '“C” is only a row, “E” is only a row'],
 		['ragged-rows', 'x,A,B,C\nA,1,.5,.2\nB,.5,1\nC,.2,.3,1', 'Line 3: expected 3 values, as the header names 3 species; got 2.'],

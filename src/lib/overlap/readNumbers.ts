@@ -9,7 +9,8 @@ import type { Decimal, Separator } from './matrixReading.ts';
  */
 export function readNumbers(entries: TextEntries, separator: Separator): { entries: MatrixEntries; decimal: Decimal } {
 	const decimal = decimalOf(entries.text, separator === ',');
-	const value = Float64Array.from(entries.text, (cell) => cellNumber(cell, decimal));
+	const value = new Float64Array(entries.text.length);
+	for (let k = 0; k < value.length; k++) value[k] = cellNumber(entries.text[k] ?? '', decimal);
 	const first = value.findIndex((number) => !Number.isFinite(number));
 	if (first !== -1) {
 		const count = value.reduce((sum, number) => sum + (Number.isFinite(number) ? 0 : 1), 0);
