@@ -35,9 +35,10 @@ export function computeBundle() {
 
 if (process.argv[2] === 'build') {
 	const commands = resolve(root, 'src/commands');
+	// The examples are written in development; a production folder only reads them.
 	const entries = readdirSync(commands)
-		.filter((name) => name.endsWith('.ts') && !name.endsWith('.test.ts'))
+		.filter((name) => name.endsWith('.ts') && !name.endsWith('.test.ts') && name !== 'makeExamples.ts')
 		.map((name) => resolve(commands, name));
-	await build({ ...shared, entryPoints: [compute], outfile: resolve(root, 'build/worker/compute.mjs'), outExtension: undefined });
+	await build({ ...shared, entryPoints: [compute], outfile: resolve(root, 'build/worker/compute.mjs') });
 	await build({ ...shared, entryPoints: entries, outdir: resolve(root, 'build/commands'), outExtension: { '.js': '.mjs' } });
 }

@@ -1,4 +1,5 @@
 import { defineConfig } from '@playwright/test';
+import { browserLaunch } from './tests/support/browserLaunch.ts';
 
 const port = 4319;
 
@@ -12,18 +13,7 @@ export default defineConfig({
 	reporter: [['list']],
 	use: {
 		baseURL: `http://127.0.0.1:${port}`,
-		launchOptions: {
-			executablePath: process.env.CHROMIUM_PATH ?? '/usr/bin/chromium',
-			args: [
-				'--no-sandbox',
-				'--disable-gpu',
-				'--disable-quic',
-				'--no-first-run',
-				'--disable-background-networking',
-				'--disable-component-update',
-				'--disable-sync'
-			]
-		}
+		launchOptions: browserLaunch
 	},
 	webServer: {
 		command: 'node build/commands/demo.mjs',

@@ -1,0 +1,47 @@
+import type { Page } from '@playwright/test';
+
+export type ShownPage = { readonly name: string; readonly path: string; readonly signedIn: boolean };
+
+/** Every kind of page of the example, found by following its own links. */
+export async function findPages(page: Page, address: string): Promise<ShownPage[]> {
+	const study = await firstLink(page, `${address}/studies`, /^\/studies\/[^/]+$/, 'Lanternfrogs');
+	const analysis = await firstLink(page, `${address}${study}/analyses`, /^\/studies\/[^/]+\/analyses\/(?!new)[^/?]+$/);
+	const run = await firstLink(page, `${address}${study}/overlaps`, /^\/studies\/[^/]+\/overlaps\/[^/?]+$/);
+	const lab = await firstLink(page, `${address}/studies`, /^\/labs\/[^/]+$/);
+	const open: [string, string][] = [
+		['front', '/'],
+		['sign-in', '/sign-in'],
+		['register', '/register'],
+		['help', '/help'],
+		['api', '/api/v1'],
+		['visitor-study', study]
+	];
+	const inside: [string, string][] = [
+		['studies', '/studies'],
+		['study', study],
+		['materials', `${study}/materials`],
+		['names', `${study}/names`],
+		['overlaps', `${study}/overlaps`],
+		['overlap-run', run],
+		['analyses', `${study}/analyses`],
+		['plan', `${study}/analyses/new`],
+		['analysis', analysis],
+		['reports', `${study}/reports`],
+		['lab', lab],
+		['account', '/account']
+	];
+	return [
+		...open.map(([name, path]) => ({ name, path, signedIn: false })),
+		...inside.map(([name, path]) => ({ name, path, signedIn: true }))
+	];
+}
+
+async function firstLink(page: Page, from: string, pattern: RegExp, text = ''): Promise<string> {
+	await page.goto(from);
+	const links = await page
+		.locator('a[href]')
+		.evaluateAll((anchors) => anchors.map((a) => ({ href: a.getAttribute('href') ?? '', text: a.textContent ?? '' })));
+	const found = links.find((link) => pattern.test(link.href) && link.text.includes(text));
+	if (found === undefined) throw new Error(`Expected a link like ${pattern} on ${from}.`);
+	return found.href;
+}
