@@ -34,6 +34,14 @@ describe('runChunks', () => {
 		expect(new Set(slopes).size).toBe(3);
 	});
 
+	// With one group of all positions for both questions, only the streams can tell them apart.
+	it('asks within the deepest split with streams of its own', () => {
+		const alike = { ...design, within: design.free };
+		const run = { seed: 5, firstChunk: 0, chunkCount: 1, shuffles: 20, within: false };
+		const inside = runChunks(alike, { ...run, within: true });
+		expect(inside.values.slope).not.toEqual(runChunks(alike, run).values.slope);
+	});
+
 	it('keeps the values it was asked for and no others', () => {
 		const { values } = runChunks(design, {
 			seed: 1,
