@@ -49,6 +49,6 @@ async function lines(where: SQL, { limit, before }: Stretch): Promise<LogLine[]>
 		at: at.toISOString(),
 		who: who ?? 'Kithline',
 		what: logWords(action, detail),
-		study: study === null || study.deletedAt !== null ? null : { id: study.id, title: study.title }
+		study: study === null || study.deletedAt !== null || action.startsWith('study.') ? null : { id: study.id, title: study.title }
 	}));
 }

@@ -9,6 +9,7 @@ import { analyses, labs, memberships, studies, treeSets } from '#lib/server/db/s
 export type StudySummary = {
 	readonly id: string;
 	readonly title: string;
+	readonly question: string;
 	readonly lab: string;
 	readonly role: Role;
 	readonly changedAt: string;
@@ -23,7 +24,14 @@ export type DeletedStudy = { readonly id: string; readonly title: string; readon
 /** The studies of every lab the person belongs to, the one changed last first. */
 export async function list(access: Access): Promise<StudySummary[]> {
 	const rows = await db()
-		.select({ id: studies.id, title: studies.title, lab: labs.name, role: memberships.role, changedAt: studies.changedAt })
+		.select({
+			id: studies.id,
+			title: studies.title,
+			question: studies.question,
+			lab: labs.name,
+			role: memberships.role,
+			changedAt: studies.changedAt
+		})
 		.from(studies)
 		.innerJoin(labs, eq(labs.id, studies.labId))
 		.innerJoin(memberships, and(eq(memberships.labId, labs.id), eq(memberships.userId, personOf(access))))

@@ -18,9 +18,11 @@ export type QuestionFacts = {
 
 const FALL: Readonly<Record<Alternative, string>> = { less: 'fall', greater: 'rise', 'two-sided': 'rise or fall' };
 
-/** The question of a study as one sentence, as far as its materials say it. */
+/** The question of a study as one sentence, as far as its materials say it; one plain part before there are any. */
 export function questionParts({ study, sharedSpecies, measure, trees, alternative }: QuestionFacts): QuestionPart[] {
 	const at = (page: string) => `/studies/${study}/${page}`;
+	const fall = ` ${FALL[alternative]} with the age of the most recent common ancestor`;
+	if (measure === null && trees === null) return [{ text: `Does niche overlap${fall}?` }];
 	const across: QuestionPart[] =
 		sharedSpecies === null
 			? [{ text: 'Does ' }]
@@ -31,7 +33,6 @@ export function questionParts({ study, sharedSpecies, measure, trees, alternativ
 				];
 	const overlap: QuestionPart =
 		measure === null ? { text: 'niche overlap' } : { text: MEASURE_NAMES[measure], href: at('overlaps') };
-	const fall = ` ${FALL[alternative]} with the age of the most recent common ancestor`;
 	if (trees === null) return [...across, overlap, { text: `${fall}?` }];
 	return [...across, overlap, { text: `${fall} on ` }, { text: treeWords(trees), href: at('materials') }, { text: '?' }];
 }

@@ -1,8 +1,10 @@
+import type { Plan } from '#lib/contracts/plan.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Access } from '#lib/server/access.ts';
 import { compute } from '#lib/server/jobs/pool.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as names from '#lib/server/repositories/names.ts';
+import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
 import * as texts from '#lib/server/repositories/texts.ts';
@@ -24,16 +26,9 @@ export async function studyHome(access: Access, study: string) {
 	const asked = await analyses.list(access);
 	const saved = await reports.list(access);
 	const pairs = (await names.matching(access))?.pairs ?? null;
-	const [newestTree, newestRun, newestPlan] = [trees[0], runs[0], asked[0]?.plan];
-	const order = dataOrder(newestTree?.tips ?? [], pairs ?? []);
+	const order = dataOrder(trees[0]?.tips ?? [], pairs ?? []);
 	return {
-		asked: questionParts({
-			study,
-			sharedSpecies: pairs?.length ?? null,
-			measure: newestRun?.measure ?? null,
-			trees: newestTree === undefined ? null : { kind: newestTree.kind, count: newestTree.treeCount },
-			alternative: newestPlan?.alternative ?? 'less'
-		}),
+		asked: questionParts({ study, sharedSpecies: pairs?.length ?? null, ...choicesOf({ trees, runs, plan: asked[0]?.plan }) }),
 		trees: trees.map(treeFacts),
 		drawing: await drawnTree(trees),
 		runs: await Promise.all(runs.slice(0, WINGS_SHOWN).map(({ id, label }) => thumbnail(access, { id, label, order }))),
@@ -41,6 +36,19 @@ export async function studyHome(access: Access, study: string) {
 		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
 		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
 		reports: saved.slice(0, LINES_SHOWN).map(({ id, title, author, changedAt }) => ({ id, title, author, changedAt }))
+	};
+}
+
+type Kept = { trees: readonly TreeSet[]; runs: readonly ListedRun[]; plan: Plan | undefined };
+
+/** What was asked last, as far as it still stands; else the newest materials. */
+function choicesOf({ trees, runs, plan }: Kept) {
+	const tree = trees.find(({ id }) => id === plan?.treeSet) ?? trees[0];
+	const run = runs.find(({ id }) => id === plan?.overlapRun) ?? runs[0];
+	return {
+		measure: run?.measure ?? null,
+		trees: tree === undefined ? null : { kind: tree.kind, count: tree.treeCount },
+		alternative: plan?.alternative ?? ('less' as const)
 	};
 }
 
