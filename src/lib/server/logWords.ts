@@ -34,6 +34,7 @@ const WORDS: Readonly<Record<LoggedAction, string>> = {
 	'overlap-run.restored': 'brought back an overlap run',
 	'name.decided': 'decided about names',
 	'name.withdrawn': 'withdrew decisions about names',
+	'analysis.declared': 'declared the plan of an analysis',
 	'analysis.asked-for': 'asked for an analysis',
 	'analysis.started': 'started an analysis',
 	'analysis.finished': 'finished an analysis',

@@ -26,6 +26,25 @@ export type Started = {
  * @throws {InputError} when the data do not allow the test
  */
 export async function startAnalysis(access: Access, request: PlanRequest): Promise<Started> {
+	const checked = await checkedPlan(access, request);
+	if ('status' in checked) return checked;
+	const { id, status, isNew } = await analyses.create(access, checked.written);
+	if (isNew) await enqueueAnalysis(id);
+	return { id, status, remarks: checked.remarks };
+}
+
+/** Writes a plan down with the time and leaves it to be run later; otherwise as `startAnalysis`, and it refuses the same. */
+export async function declareAnalysis(access: Access, request: PlanRequest): Promise<Started> {
+	const checked = await checkedPlan(access, request);
+	if ('status' in checked) return checked;
+	const { id, status } = await analyses.declare(access, checked.written);
+	return { id, status, remarks: checked.remarks };
+}
+
+type Checked = { readonly written: analyses.NewAnalysis; readonly remarks: readonly Remark[] };
+
+/** The plan, ready to be written down; or the equal one that waits, works or has finished. */
+async function checkedPlan(access: Access, request: PlanRequest): Promise<Started | Checked> {
 	const materials = await materialsOf(access, request);
 	const plan = completePlan(request, materials);
 	const decisions = decisionsFor(materials.run, await names.current(access));
@@ -33,11 +52,9 @@ export async function startAnalysis(access: Access, request: PlanRequest): Promi
 	const held = await analyses.findByHash(access, hash);
 	const isDone = held !== null && held.deletedAt === null && !['stopped', 'failed'].includes(held.status);
 	if (isDone) return { id: held.id, status: held.status, remarks: [] };
-	refuseOpenRemarks(materials, plan);
-	const preview = await compute('preview', await computeArgument(plan, materials, decisions));
-	const { id, status, isNew } = await analyses.create(access, { plan, hash, decisions });
-	if (isNew) await enqueueAnalysis(id);
-	return { id, status, remarks: preview.remarks };
+	refuseOpenRemarks(materials);
+	const { remarks } = await compute('preview', await computeArgument(plan, materials, decisions));
+	return { written: { plan, hash, decisions }, remarks };
 }
 
 async function materialsOf(access: Access, { treeSet: treeSetId, overlapRun, covariates }: PlanRequest): Promise<Materials> {
@@ -91,9 +108,10 @@ function refuseLater({ clades, signal, robustness }: PlanRequest): void {
 }
 
 /** What is open about the matrix and the tree is listed at once, so that nobody settles one thing to meet the next. */
-function refuseOpenRemarks({ treeSet, run }: Materials, { tree }: Plan): void {
-	// A set keeps the remarks of its first tree; those of another are found when it is read.
-	const ofTree = tree === 0 ? treeSet.remarks : [];
+function refuseOpenRemarks({ treeSet, run }: Materials): void {
+	// A set keeps the remarks on all of its trees; which of several can be used is found when the chosen one is read.
+	const isOneTree = treeSet.treeCount === 1 && treeSet.chosen.burnIn === 0 && treeSet.chosen.thin === 1;
+	const ofTree = isOneTree ? treeSet.remarks : [];
 	const open = [...ofTree, ...run.remarks].filter((remark) => remark.level === 'settle');
 	const first = open[0];
 	if (first === undefined) return;

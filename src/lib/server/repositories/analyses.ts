@@ -1,4 +1,4 @@
-import { and, desc, eq, inArray, isNull } from 'drizzle-orm';
+import { and, desc, eq, inArray, isNotNull, isNull } from 'drizzle-orm';
 import type { AnalysisProgress, AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { AnalysisStatus } from '#lib/contracts/materials.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
@@ -23,6 +23,16 @@ export async function list(access: Access): Promise<ListedAnalysis[]> {
 		.from(analyses)
 		.where(and(within(access, analyses.studyId), isNull(analyses.deletedAt)))
 		.orderBy(desc(analyses.createdAt), desc(analyses.id));
+	return rows.map(listedAnalysis);
+}
+
+/** What may be brought back, the one deleted last first. */
+export async function listDeleted(access: Access): Promise<ListedAnalysis[]> {
+	const rows = await db()
+		.select(listedColumns)
+		.from(analyses)
+		.where(and(within(access, analyses.studyId), isNotNull(analyses.deletedAt)))
+		.orderBy(desc(analyses.deletedAt));
 	return rows.map(listedAnalysis);
 }
 
@@ -73,10 +83,37 @@ export function create(access: Access, { plan, hash, decisions }: NewAnalysis): 
 	});
 }
 
-async function again(access: Access, hash: string): Promise<Asked> {
+/**
+ * Writes the plan down with the time and does not run it: it stands as stopped, never begun, until `create` is asked for
+ * the same. An equal one that is there already is answered as it is; a declaration never comes after a result.
+ */
+export function declare(access: Access, { plan, hash, decisions }: NewAnalysis): Promise<Asked> {
+	const id = newId();
+	const owner = { studyId: studyOf(access), createdBy: personOf(access) };
+	const materials = { treeSetId: plan.treeSet, overlapRunId: plan.overlapRun };
+	const written = { plan, hash, decisions: [...decisions], declaredAt: new Date() };
+	return transaction(async (tx) => {
+		const added = await tx
+			.insert(analyses)
+			.values({ id, ...owner, ...materials, ...written, status: 'stopped' })
+			.onConflictDoNothing()
+			.returning({ id: analyses.id });
+		if (added.length === 0) return standing(access, hash);
+		await studies.touch(access);
+		await logBook.append(access, { action: 'analysis.declared', detail: { analysis: id, hash } });
+		return { id, status: 'stopped', isNew: true };
+	});
+}
+
+async function standing(access: Access, hash: string): Promise<Asked> {
 	const held = await findByHash(access, hash);
 	if (held === null) throw new Error('Expected the analysis that holds this hash; it is not there.');
 	if (held.deletedAt !== null) await restore(access, held.id);
+	return { id: held.id, status: held.status, isNew: false };
+}
+
+async function again(access: Access, hash: string): Promise<Asked> {
+	const held = await standing(access, hash);
 	const renewed = await db()
 		.update(analyses)
 		.set({ status: 'waiting', progress: null, failure: null, startedAt: null, finishedAt: null, heartbeatAt: null })

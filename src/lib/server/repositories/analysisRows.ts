@@ -20,6 +20,8 @@ export type ListedAnalysis = {
 	readonly failure: AnalysisFailure | null;
 	/** the few numbers of a finished analysis that a line of a list holds */
 	readonly headline: Headline | null;
+	/** the plan was written down before anything ran */
+	readonly declaredAt: string | null;
 	readonly createdBy: string;
 	readonly createdAt: string;
 	readonly startedAt: string | null;
@@ -57,23 +59,21 @@ export const listedColumns = {
 };
 
 export function listedAnalysis(row: ListedRow): ListedAnalysis {
-	const { declaredAt: _declared, heartbeatAt: _heartbeat, ...rest } = row;
+	const { heartbeatAt: _heartbeat, ...rest } = row;
 	return { ...rest, ...timesOf(row) };
 }
 
 export function analysisFromRow(row: Row): Analysis {
-	const { declaredAt: _declared, heartbeatAt: _heartbeat, ...rest } = row;
+	const { heartbeatAt: _heartbeat, ...rest } = row;
 	return { ...rest, ...timesOf(row) };
 }
 
-function timesOf({
-	createdAt,
-	startedAt,
-	finishedAt,
-	deletedAt
-}: Pick<Row, 'createdAt' | 'startedAt' | 'finishedAt' | 'deletedAt'>) {
+type Times = Pick<Row, 'createdAt' | 'declaredAt' | 'startedAt' | 'finishedAt' | 'deletedAt'>;
+
+function timesOf({ createdAt, declaredAt, startedAt, finishedAt, deletedAt }: Times) {
 	return {
 		createdAt: createdAt.toISOString(),
+		declaredAt: declaredAt?.toISOString() ?? null,
 		startedAt: startedAt?.toISOString() ?? null,
 		finishedAt: finishedAt?.toISOString() ?? null,
 		deletedAt: deletedAt?.toISOString() ?? null

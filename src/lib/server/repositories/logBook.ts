@@ -38,6 +38,7 @@ export const LOGGED_ACTIONS = [
 	'overlap-run.restored',
 	'name.decided',
 	'name.withdrawn',
+	'analysis.declared',
 	'analysis.asked-for',
 	'analysis.started',
 	'analysis.finished',

@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull } from 'drizzle-orm';
+import { and, desc, eq, isNotNull, isNull } from 'drizzle-orm';
 import { writeCaption } from '#lib/analysis/words/caption.ts';
 import type { FigureSettings, ReportRequest } from '#lib/contracts/report.ts';
 import { personOf, type Access } from '#lib/server/access.ts';
@@ -51,6 +51,17 @@ export async function list(access: Access, { analysis }: { analysis?: string } =
 		.innerJoin(users, eq(users.id, reports.createdBy))
 		.where(and(within(access, reports.studyId), isNull(reports.deletedAt), ofAnalysis))
 		.orderBy(desc(reports.createdAt), desc(reports.id));
+	return rows.map(fromRow);
+}
+
+/** What may be brought back, the one deleted last first. */
+export async function listDeleted(access: Access): Promise<Report[]> {
+	const rows = await db()
+		.select(columns)
+		.from(reports)
+		.innerJoin(users, eq(users.id, reports.createdBy))
+		.where(and(within(access, reports.studyId), isNotNull(reports.deletedAt)))
+		.orderBy(desc(reports.deletedAt));
 	return rows.map(fromRow);
 }
 
