@@ -1,0 +1,31 @@
+import type { PlateInput } from './plateModel.ts';
+import { shuffleOnce, type Deal } from './shuffleOnce.ts';
+
+/**
+ * The state of “Shuffle once”. A page makes one, gives it to the plate and calls `shuffle()` from its button; `putBack()`
+ * returns every species to its own tip and keeps the ticks.
+ */
+export class ShuffleDeck {
+	#input: PlateInput;
+	#seed: number;
+	/** the last deal, null while every species stands on its own tip */
+	deal = $state.raw<Deal | null>(null);
+	/** slopes of all deals so far, oldest first */
+	slopes = $state.raw<readonly number[]>([]);
+
+	constructor(input: PlateInput, seed = 1) {
+		this.#input = input;
+		this.#seed = seed;
+	}
+
+	shuffle(): Deal {
+		const deal = shuffleOnce(this.#input, this.#seed, this.slopes.length);
+		this.deal = deal;
+		this.slopes = [...this.slopes, deal.slope];
+		return deal;
+	}
+
+	putBack(): void {
+		this.deal = null;
+	}
+}
