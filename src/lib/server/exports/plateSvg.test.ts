@@ -1,0 +1,68 @@
+import { describe, expect, it } from 'vitest';
+import { microPlate } from '#lib/figures/microPlate.fixture.ts';
+import { renderPlatePdf } from './platePdf.ts';
+import { renderPlatePng } from './platePng.ts';
+import { drawPlate, renderPlateSvg } from './plateSvg.ts';
+
+const AWKWARD = ['Rana <b>', 'Rana "q" & o\u2019d', 'Rana caf\u00e9', 'Rana </text><script>'];
+
+describe('renderPlateSvg', () => {
+	const svg = renderPlateSvg(microPlate(), { measureName: 'Schoener\u2019s D' });
+
+	it('is one drawing with its size in millimetres', () => {
+		expect(svg).toMatch(/^<svg [^>]*width="174mm" height="[\d.]+mm"/);
+		expect(svg.match(/<svg/g)).toHaveLength(1);
+	});
+
+	it('holds live text, no class, no comment and no token of the page', () => {
+		expect(svg).toContain('Arial, Helvetica, Arimo, sans-serif');
+		expect(svg).not.toMatch(/class=|<!--|var\(/);
+		for (const letter of ['a', 'b', 'c', 'd', 'e']) expect(svg).toContain(`>${letter}</text>`);
+	});
+
+	it('escapes whatever stands in a species name', () => {
+		const text = renderPlateSvg(microPlate(AWKWARD), { abbreviateGenus: false });
+		expect(text).not.toMatch(/<script|<b>/);
+		expect(text).toContain('Rana &lt;b');
+		expect(text).toContain('Rana caf\u00e9');
+	});
+
+	it('turns the whole plate round', () => {
+		const place = (text: string, letter: string) =>
+			Number(new RegExp(`<text x="([\\d.]+)"[^>]*>${letter}</text>`).exec(text)?.[1]);
+		const turned = renderPlateSvg(microPlate(), { ageDirection: 'present-right' });
+		expect(place(svg, 'a')).toBeLessThan(place(svg, 'b'));
+		expect(place(turned, 'a')).toBeGreaterThan(place(turned, 'b'));
+	});
+
+	it('refuses a width, a resolution or a type size no figure has', () => {
+		expect(() => renderPlateSvg(microPlate(), { widthMm: 20 })).toThrow('Expected widthMm between 30 and 300; got 20.');
+		expect(() => renderPlateSvg(microPlate(), { typeSizePt: 5 })).toThrow('typeSizePt');
+		expect(() => renderPlatePng(microPlate(), { dpi: Number.NaN })).toThrow('dpi');
+	});
+
+	it('keeps the width that was asked in every direction and palette', () => {
+		for (const widthMm of [30, 84, 129, 300])
+			expect(drawPlate(microPlate(), { widthMm, palette: 'viridis' }, 'pt').widthPt).toBeCloseTo((widthMm * 72) / 25.4, 9);
+	});
+});
+
+describe('renderPlatePng', () => {
+	// 84 mm at 300 dpi: 84 / 25.4 × 300 = 992.1 pixels; 300 dpi are 11,811 pixels per metre.
+	it('has the pixels of its width and says its resolution', () => {
+		const png = renderPlatePng(microPlate(), { widthMm: 84, dpi: 300 });
+		expect(png.readUInt32BE(16)).toBe(992);
+		const place = png.indexOf('pHYs');
+		expect([png.readUInt32BE(place + 4), png.readUInt32BE(place + 8), png[place + 12]]).toEqual([11811, 11811, 1]);
+	});
+});
+
+describe('renderPlatePdf', () => {
+	it('is a page of the asked width with its fonts inside', async () => {
+		const pdf = await renderPlatePdf(microPlate(AWKWARD), { widthMm: 127 });
+		expect(pdf.subarray(0, 5).toString()).toBe('%PDF-');
+		expect(pdf.toString('latin1')).toMatch(/MediaBox \[0 0 360 /); // 127 mm are 5 inches, 360 points
+		expect(pdf.toString('latin1')).toContain('Arimo');
+		expect(pdf.toString('latin1')).toContain('FontFile2');
+	});
+});
