@@ -128,7 +128,11 @@ export const namesAnswerSchema = z.object({
 		.object({
 			sentence: z.string(),
 			pairs: z.array(z.object({ species: z.string(), tip: z.string() })),
-			dropped: z.array(z.object({ name: z.string(), in: z.enum(['tree', 'data']), why: z.string() }))
+			dropped: z.array(z.object({ name: z.string(), in: z.enum(['tree', 'data']), why: z.string() })),
+			/** what still asks for a decision; both names where a match is proposed */
+			open: z.array(
+				z.object({ species: z.string().nullable(), tip: z.string().nullable(), kind: z.string(), reason: z.string() })
+			)
 		})
 		.nullable()
 });
@@ -169,7 +173,8 @@ export const plateQuerySchema = z.strictObject({
 	width: z.coerce.number().pipe(figureSettingsSchema.shape.widthMm.unwrap()).optional(),
 	dpi: z.coerce.number().pipe(figureSettingsSchema.shape.dpi.unwrap()).optional(),
 	age: figureSettingsSchema.shape.age.unwrap().optional(),
-	palette: figureSettingsSchema.shape.palette.unwrap().optional()
+	palette: figureSettingsSchema.shape.palette.unwrap().optional(),
+	type: z.coerce.number().pipe(figureSettingsSchema.shape.typeSizePt.unwrap()).optional()
 });
 export const treeQuerySchema = z.strictObject({
 	tree: z.coerce.number().int().nonnegative().default(0),

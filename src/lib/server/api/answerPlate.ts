@@ -33,8 +33,8 @@ export async function answerPlate(
 ): Promise<Response> {
 	const kind = KINDS.get(format);
 	if (kind === undefined) throw new Refusal(404, 'not-found', NOT_FOUND);
-	const { width, dpi, age, palette } = settings;
-	const drawn = await kind.render(result, plateSettings(result, { widthMm: width, dpi, age, palette }));
+	const { width, dpi, age, palette, type } = settings;
+	const drawn = await kind.render(result, plateSettings(result, { widthMm: width, dpi, age, palette, typeSizePt: type }));
 	const file = `plate.${format}`;
 	await noteExport(access, { analysis: id, file });
 	return fileResponse(drawn, { type: kind.type, file });

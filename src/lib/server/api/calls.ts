@@ -191,7 +191,7 @@ export const CALLS: readonly Call[] = [
 		...reading,
 		path: '/analyses/{analysis}/plate.{format}',
 		id: 'drawPlate',
-		does: 'The plate as svg, pdf or png; `width` in mm, `age` is where the present stands.',
+		does: 'The plate as svg, pdf or png; `width` in mm, `type` in pt, `age` is where the present stands.',
 		query: plateQuerySchema,
 		answers: [
 			{ status: 200, means: 'The plate', content: { ...file('image/svg+xml'), ...file('application/pdf'), ...file('image/png') } }

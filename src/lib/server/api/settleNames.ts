@@ -1,3 +1,4 @@
+import { tidyName } from '#lib/analysis/names/tidyName.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
@@ -15,7 +16,8 @@ export async function settleNames(access: Access, decisions: readonly Decision[]
 	const tips = shownNames((await treeSets.list(access)).flatMap((set) => set.tips));
 	const species = shownNames((await overlapRuns.list(access)).flatMap((run) => run.species));
 	const settled = decisions.map(({ from, to, why }) => ({
-		from: shown(species, from),
+		// A tip of the tree can be left out as well.
+		from: shown(species, from) ?? (to === null ? shown(tips, from) : undefined),
 		to: to === null ? null : shown(tips, to),
 		...(why === undefined ? {} : { why })
 	}));
@@ -28,16 +30,12 @@ type Shown = ReadonlyMap<string, string>;
 
 /** Names of all materials by themselves and by their tidied form; exact spelling goes first. */
 function shownNames(names: readonly string[]): Shown {
-	const tidied = names.map((name): [string, string] => [tidy(name), name]);
+	const tidied = names.map((name): [string, string] => [tidyName(name).key, name]);
 	return new Map([...tidied, ...names.map((name): [string, string] => [name, name])]);
 }
 
 function shown(names: Shown, name: string): string | undefined {
-	return names.size === 0 ? name : (names.get(name) ?? names.get(tidy(name)));
-}
-
-function tidy(name: string): string {
-	return name.normalize('NFC').replaceAll('_', ' ').replaceAll(/\s+/g, ' ').trim().toLowerCase();
+	return names.size === 0 ? name : (names.get(name) ?? names.get(tidyName(name).key));
 }
 
 function refuseTwice(decisions: readonly Decision[]): void {

@@ -14,7 +14,9 @@ describe('canonicalJson', () => {
 
 	it('stays JSON of the same value', () => {
 		fc.assert(
-			fc.property(fc.jsonValue(), (value) => expect(JSON.parse(canonicalJson(value))).toEqual(JSON.parse(JSON.stringify(value))))
+			fc.property(fc.jsonValue(), (value) => {
+				expect(JSON.parse(canonicalJson(value))).toEqual(JSON.parse(JSON.stringify(value)));
+			})
 		);
 	});
 });

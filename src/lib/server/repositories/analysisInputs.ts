@@ -20,11 +20,14 @@ export type Materials = { readonly treeSet: TreeSet; readonly run: OverlapRun };
 /** What a compute thread is given. The tree of the plan is counted in the text, not in the chosen trees of the set. */
 export type ComputeArgument = { readonly inputs: AnalysisInputs; readonly plan: Plan };
 
-/** The decisions that can touch a run: those about names it holds, in a fixed order. */
+/**
+ * The decisions that can touch a run, in a fixed order: those about names it holds, and every name left out, since that
+ * may be a tip of the tree.
+ */
 export function decisionsFor(run: Pick<OverlapRun, 'species'>, decisions: readonly NameDecision[]): UsedDecision[] {
 	const held = new Set(run.species);
 	return decisions
-		.filter((decision) => held.has(decision.from))
+		.filter(({ from, to }) => held.has(from) || to === null)
 		.map(({ from, to, why }) => ({ from, to, ...(why === '' ? {} : { why }) }))
 		.sort((a, b) => (a.from < b.from ? -1 : 1));
 }

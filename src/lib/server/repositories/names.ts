@@ -1,5 +1,7 @@
 import { and, desc, eq } from 'drizzle-orm';
-import { matchNames, type NameMatching } from '#lib/analysis/names/matchNames.ts';
+import { matchNames, type NameMatching, type NameRow } from '#lib/analysis/names/matchNames.ts';
+import { InputError } from '#lib/remarks/inputError.ts';
+import { remark } from '#lib/remarks/remark.ts';
 import { personOf, studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
 import { nameDecisions, users } from '#lib/server/db/schema.ts';
@@ -113,10 +115,49 @@ async function insertRows(rows: readonly (typeof nameDecisions.$inferInsert)[]):
 /** Which materials are compared; without an id, the newest of the study. */
 export type Compared = { readonly treeSet?: string; readonly overlapRun?: string };
 
-/** Tips of a tree set against species of a run under the decisions in force; null until both are there. */
+/**
+ * Tips of a tree set against species of a run under the decisions in force; null until both are there. Materials without
+ * a single name in common are told in the same form, since a person can decide even then.
+ */
 export async function matching(access: Access, { treeSet, overlapRun }: Compared = {}): Promise<NameMatching | null> {
 	const trees = treeSet === undefined ? (await treeSets.list(access))[0] : await treeSets.find(access, treeSet);
 	const run = overlapRun === undefined ? (await overlapRuns.list(access))[0] : await overlapRuns.findListed(access, overlapRun);
 	if (trees == null || run == null) return null;
-	return matchNames({ tips: trees.tips, species: run.species, decisions: await current(access) });
+	const { tips } = trees;
+	const { species } = run;
+	try {
+		return matchNames({ tips, species, decisions: await current(access) });
+	} catch (thrown) {
+		if (!(thrown instanceof InputError)) throw thrown;
+		return noneShared({ tips, species }, thrown);
+	}
+}
+
+type Names = { readonly tips: readonly string[]; readonly species: readonly string[] };
+
+function noneShared({ tips, species }: Names, { code, message, where }: InputError): NameMatching {
+	const inData = species.map((name): NameRow => ({
+		species: name,
+		kind: 'only-in-data',
+		reason: 'no tip is spelled like it',
+		settled: false
+	}));
+	const inTree = tips.map((name): NameRow => ({
+		tip: name,
+		kind: 'only-in-tree',
+		reason: 'no species is spelled like it',
+		settled: false
+	}));
+	const byKind = { exact: 0, tidied: 0, probable: 0, twice: 0, 'only-in-tree': tips.length, 'only-in-data': species.length };
+	return {
+		rows: [...inData, ...inTree],
+		pairs: [],
+		dropped: [
+			...species.map((name) => ({ name, in: 'data' as const, why: 'no tip is spelled like it' })),
+			...tips.map((name) => ({ name, in: 'tree' as const, why: 'no species is spelled like it' }))
+		],
+		counts: { tips: tips.length, species: species.length, pairs: 0, open: tips.length + species.length, byKind },
+		sentence: message,
+		remarks: [remark('settle', code, message, where)]
+	};
 }

@@ -34,7 +34,7 @@ export async function readTreeSet({ text, kind, burnIn = 0, thin = 1, confirm }:
 		kind: kind ?? (reading.trees.length > 1 ? 'posterior' : 'summary'),
 		treeCount: used.length,
 		summary: summaryOf(first, burnIn, thin),
-		remarks: [...reading.remarks, ...first.remarks]
+		remarks: [...reading.remarks]
 	};
 }
 
