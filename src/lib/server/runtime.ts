@@ -9,6 +9,7 @@ import { openPool } from './jobs/openPool.ts';
 import { openQueue } from './jobs/queue.ts';
 import { takeLock } from './lock.ts';
 import { describeError, log } from './log.ts';
+import { sweepTurns } from './rateLimit.ts';
 import * as analyses from './repositories/analyses.ts';
 import { keptSecret } from './secret.ts';
 
@@ -54,6 +55,9 @@ export async function closeRuntime(): Promise<void> {
 
 type Closing = () => unknown;
 
+const SWEEP_EVERY_MS = 3_600_000;
+const logSweep = (thrown: unknown) => log('warning', 'sweep', describeError(thrown));
+
 async function openParts(options: RuntimeOptions, steps: Closing[]): Promise<Runtime> {
 	if (options.databaseUrl === null) {
 		const lock = takeLock(options.dataFolder, options.command);
@@ -72,6 +76,8 @@ async function openParts(options: RuntimeOptions, steps: Closing[]): Promise<Run
 	const capacity = (options.works ?? true) ? Math.max(1, threads - 1) : 0;
 	const worker = openAnalysisWorker({ queue, store: options.store ?? analyses, progress, capacity });
 	steps.unshift(worker.close);
+	const sweeping = setInterval(() => void sweepTurns().catch(logSweep), SWEEP_EVERY_MS).unref();
+	steps.unshift(() => clearInterval(sweeping));
 	const isDemo = options.isDemo ?? false;
 	let closing: Promise<void> | null = null;
 	const close = () => (closing ??= closeAll(steps));

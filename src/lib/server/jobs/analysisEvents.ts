@@ -16,35 +16,36 @@ export type Mailbox = {
 };
 
 /**
- * Keeps what arrives between two takes as one event: progress is joined, an end replaces it. A slow reader therefore
+ * Keeps what arrives between two takes as at most two events: all progress joined, then an end. A slow reader therefore
  * misses no slope and holds back nobody.
  */
 export function openMailbox(): Mailbox {
-	let held: AnalysisEvent | null = null;
+	let progress: AnalysisProgress | null = null;
+	let end: AnalysisEvent | null = null;
 	let ring: (() => void) | null = null;
 	const put = (event: AnalysisEvent) => {
-		held = join(held, event);
+		if (event.type === 'progress') progress = joinProgress(progress, event.progress);
+		else end = event;
 		ring?.();
 	};
-	const take = async (timeoutMs: number) => {
-		if (held === null) {
-			await new Promise<void>((wake) => {
-				const timer = setTimeout(wake, timeoutMs);
-				ring = () => {
-					clearTimeout(timer);
-					wake();
-				};
-			});
-			ring = null;
-		}
-		const event = held;
-		held = null;
+	const held = (): AnalysisEvent | null => {
+		if (progress === null) return end;
+		const event: AnalysisEvent = { type: 'progress', progress };
+		progress = null;
 		return event;
 	};
+	const take = async (timeoutMs: number) => {
+		const event = held();
+		if (event !== null) return event;
+		await new Promise<void>((wake) => {
+			const timer = setTimeout(wake, timeoutMs);
+			ring = () => {
+				clearTimeout(timer);
+				wake();
+			};
+		});
+		ring = null;
+		return held();
+	};
 	return { put, take };
-}
-
-function join(held: AnalysisEvent | null, event: AnalysisEvent): AnalysisEvent {
-	if (held?.type !== 'progress' || event.type !== 'progress') return event;
-	return { type: 'progress', progress: joinProgress(held.progress, event.progress) };
 }

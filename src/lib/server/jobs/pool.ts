@@ -1,8 +1,8 @@
-import { MessageChannel } from 'node:worker_threads';
+import { MessageChannel, receiveMessageOnPort } from 'node:worker_threads';
 import type { ComputeOutcome, ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
-import { heldRuntime, runtime } from '#lib/server/heldRuntime.ts';
+import { runtime } from '#lib/server/heldRuntime.ts';
 
 export type ComputeOptions = {
 	readonly onProgress?: (progress: ComputeProgress) => void;
@@ -39,6 +39,8 @@ export async function compute<Task extends ComputeTask>(
 			{ task, argument, port: channel?.port1 ?? null },
 			{ transferList: channel === null ? [] : [channel.port1], signal: signal ?? null }
 		);
+		// What the thread said last may still be on its way when its answer is here.
+		for (let late = next(channel); late !== null; late = next(channel)) onProgress?.(late);
 		if (!outcome.ok) throw new ComputeRefusedError(outcome.refusal);
 		return outcome.value;
 	} finally {
@@ -46,7 +48,7 @@ export async function compute<Task extends ComputeTask>(
 	}
 }
 
-/** Whether a stopped task was stopped on purpose: by its signal, or because the program is closing. */
-export function wasStopped(thrown: unknown, signal: AbortSignal): boolean {
-	return signal.aborted || heldRuntime() === undefined || (thrown instanceof Error && thrown.name === 'AbortError');
+function next(channel: MessageChannel | null): ComputeProgress | null {
+	const received: { message: ComputeProgress } | undefined = channel === null ? undefined : receiveMessageOnPort(channel.port2);
+	return received?.message ?? null;
 }
