@@ -76,7 +76,7 @@ module.exports = {
 			from: { path: sciences, pathNot: tests },
 			to: {
 				path: 'node_modules/|^node:',
-				pathNot: 'node_modules/(ml-matrix|simple-statistics|jstat|csv-parse)/'
+				pathNot: 'node_modules/(ml-matrix|simple-statistics|jstat)/'
 			}
 		},
 		{

@@ -42,6 +42,7 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 	const outcome = permutationTest(design, {
 		permutations: plan.permutations,
 		seed: plan.seed,
+		keep: [...new Set(['nodes-plain', plan.statistic] as const)],
 		...(onProgress ? { onProgress } : {})
 	});
 

@@ -37,31 +37,6 @@ export function incompleteGamma(shape: number, x: number): { lower: number; uppe
 	return { lower: 1 - upper, upper };
 }
 
-/**
- * Regularised incomplete beta function I_x(a, b).
- *
- * @param x - in [0, 1]
- * @param a - > 0
- * @param b - > 0
- * @see NIST DLMF 8.17.22, and 8.17.4 for the mirrored half where the fraction is slow
- */
-export function incompleteBeta(x: number, a: number, b: number): number {
-	if (x <= 0) return 0;
-	if (x >= 1) return 1;
-	if (x > (a + 1) / (a + b + 2)) return 1 - incompleteBeta(1 - x, b, a);
-	const scale = Math.exp(lnGamma(a + b) - lnGamma(a) - lnGamma(b) + a * Math.log(x) + b * Math.log1p(-x)) / a;
-	const fraction = settle((k) => {
-		if (k === 0) return [1, 1];
-		const m = k >> 1;
-		const numerator =
-			k % 2 === 0
-				? (m * (b - m) * x) / ((a + 2 * m - 1) * (a + 2 * m))
-				: (-(a + m) * (a + b + m) * x) / ((a + 2 * m) * (a + 2 * m + 1));
-		return [numerator, 1];
-	});
-	return Math.min(1, scale / fraction);
-}
-
 function gammaSeries(shape: number, x: number): number {
 	let term = 1 / shape;
 	let sum = term;
