@@ -33,6 +33,11 @@ describe('nextAction', () => {
 		});
 	});
 
+	it('plans a test where a plan is written', () => {
+		const next = nextAction(standing({ analyses: 'not-started', reports: 'not-started' }), null);
+		expect(next).toEqual({ text: 'Plan the test', href: '/studies/s/analyses/new' });
+	});
+
 	it('asks for nothing when all is ready', () => {
 		expect(nextAction(standing({}), 'a1')).toBeNull();
 	});

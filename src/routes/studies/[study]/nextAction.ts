@@ -34,5 +34,5 @@ export function nextAction(stations: readonly Standing[], newestFinished: string
 	if (key === 'overlaps' || key === 'names') return { text: START.overlaps, href: href.replace(/[^/]+$/, 'materials') };
 	if (key === 'reports' && newestFinished !== null)
 		return { text: START.reports, href: href.replace(/[^/]+$/, `analyses/${newestFinished}`) };
-	return { text: START[key], href };
+	return { text: START[key], href: key === 'analyses' ? `${href}/new` : href };
 }
