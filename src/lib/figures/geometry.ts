@@ -27,10 +27,6 @@ export function mirrored(rect: Rect, sheetWidth: number): Rect {
 	return { ...rect, x: sheetWidth - rect.x - rect.width };
 }
 
-export function contains(rect: Rect, [x, y]: Point): boolean {
-	return x >= rect.x && x <= right(rect) && y >= rect.y && y <= bottom(rect);
-}
-
 export function clamp(value: number, low: number, high: number): number {
 	return Math.min(high, Math.max(low, value));
 }

@@ -41,6 +41,11 @@ describe('renderPlateSvg', () => {
 		expect(() => renderPlatePng(microPlate(), { dpi: Number.NaN })).toThrow('dpi');
 	});
 
+	it('draws even the narrowest figure without a negative size', () => {
+		expect(renderPlateSvg(microPlate(), { widthMm: 30 })).not.toMatch(/width="-|NaN/);
+		expect(renderPlateSvg(microPlate(), { widthMm: 84, typeSizePt: 14 })).not.toMatch(/width="-|NaN/);
+	});
+
 	it('keeps the width that was asked in every direction and palette', () => {
 		for (const widthMm of [30, 84, 129, 300])
 			expect(drawPlate(microPlate(), { widthMm, palette: 'viridis' }, 'pt').widthPt).toBeCloseTo((widthMm * 72) / 25.4, 9);

@@ -17,6 +17,8 @@ const MAX_HEIGHT_MM = 250;
 const SMALLEST_NAME_PT = 4.7;
 /** Journals want no lettering under 6 pt. */
 const SMALLEST_LABEL_PT = 6;
+/** Narrower than this the panels have no room; the type of a very narrow figure gives way instead. */
+const LEAST_WIDTH = 280;
 /** A metric-compatible family first where it exists; the last one is what our own renderers embed. */
 export const EXPORT_FAMILY = 'Arial, Helvetica, Arimo, sans-serif';
 
@@ -28,8 +30,8 @@ export function renderPlateSvg(result: PlateInput, chosen: Partial<FigureSetting
 /** The same drawing with its outer size in millimetres, or in points for readers that know only those. */
 export function drawPlate(result: PlateInput, chosen: Partial<FigureSettings>, unit: 'mm' | 'pt'): PlateSvg {
 	const settings = figureSettings(chosen);
-	const pointsPerUnit = settings.typeSizePt / TYPE;
 	const widthPt = settings.widthMm * POINTS_PER_MM;
+	const pointsPerUnit = Math.min(settings.typeSizePt / TYPE, widthPt / LEAST_WIDTH);
 	const scene = plateScene(result, {
 		width: widthPt / pointsPerUnit,
 		direction: settings.ageDirection,

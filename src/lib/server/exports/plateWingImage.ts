@@ -29,11 +29,11 @@ export function wingImage(count: number, shareOf: (i: number, j: number) => numb
 	header.writeUInt32BE(side, 4);
 	header.set([8, 3, 0, 0, 0], 8); // 8 bits, colour table
 	const chunks = [
-		chunk('IHDR', header),
-		chunk('PLTE', table),
-		chunk('tRNS', clear),
-		chunk('IDAT', deflateSync(pixels)),
-		chunk('IEND', Buffer.alloc(0))
+		pngChunk('IHDR', header),
+		pngChunk('PLTE', table),
+		pngChunk('tRNS', clear),
+		pngChunk('IDAT', deflateSync(pixels)),
+		pngChunk('IEND', Buffer.alloc(0))
 	];
 	const png = Buffer.concat([Buffer.from([137, 80, 78, 71, 13, 10, 26, 10]), ...chunks]);
 	return `data:image/png;base64,${png.toString('base64')}`;
@@ -41,10 +41,6 @@ export function wingImage(count: number, shareOf: (i: number, j: number) => numb
 
 function classOf(share: number): number {
 	return Number.isNaN(share) ? MISSING : rampClass(share);
-}
-
-function chunk(type: string, data: Buffer): Buffer {
-	return pngChunk(type, data);
 }
 
 /** One chunk of a PNG file: length, type, data, checksum. */
