@@ -1,8 +1,8 @@
-import { eq } from 'drizzle-orm';
-import { afterEach, describe, expect, it } from 'vitest';
+import { eq, sql } from 'drizzle-orm';
+import { afterAll, afterEach, beforeAll, beforeEach, describe, expect, it } from 'vitest';
 import { db, transaction } from '#lib/server/db/client.ts';
 import { analyses } from '#lib/server/db/schema.ts';
-import { runtime } from '#lib/server/heldRuntime.ts';
+import { heldRuntime, runtime } from '#lib/server/heldRuntime.ts';
 import { enqueueAnalysis, stopAnalysis, watchAnalysis, type AnalysisEvent } from '#lib/server/jobs/analysisJobs.ts';
 import { STALE_AFTER_MS } from '#lib/server/jobs/heartbeat.ts';
 import { MOST_ATTEMPTS } from '#lib/server/jobs/queue.ts';
@@ -10,18 +10,23 @@ import * as users from '#lib/server/repositories/users.ts';
 import { fillStudy } from './support/fillStudy.ts';
 import { openTestRuntime, type TestRuntime } from './support/openTestRuntime.ts';
 import { runChild, type Child } from './support/runChild.ts';
-import { SLOW_COMPUTE, slowStore } from './support/slowStore.ts';
+import { SLOW_COMPUTE, slowStore, type Script } from './support/slowStore.ts';
 
 const FEW = 5;
 const MANY = 1_000_000;
+const script: Script = { steps: FEW, text: '' };
 let open: TestRuntime | null = null;
 let child: Child | null = null;
 
-async function openSlow(steps: number, { treeText = '', dataFolder = '' } = {}): Promise<TestRuntime> {
-	const place = dataFolder === '' ? {} : { dataFolder };
-	open = await openTestRuntime({ computeFile: SLOW_COMPUTE, store: slowStore(steps, treeText), ...place });
+const openSlow = async (place: { dataFolder?: string } = {}) => {
+	open = await openTestRuntime({ computeFile: SLOW_COMPUTE, store: slowStore(script), ...place });
 	return open;
-}
+};
+
+/** One runtime serves every test that does not end it. */
+const openOnce = async () => {
+	if (open === null) await openSlow();
+};
 
 async function newAnalysis(): Promise<string> {
 	const known = await users.credentialsOf('ada@lab.example');
@@ -42,17 +47,20 @@ async function firstProgress(id: string): Promise<void> {
 	for await (const event of watchAnalysis(id)) if (event.type === 'progress') return;
 }
 
+beforeEach(() => Object.assign(script, { steps: FEW, text: '' }));
+/** The one thread must be free for the next test. */
 afterEach(async () => {
-	if (child?.process.exitCode === null) child.process.kill('SIGKILL');
-	await child?.ended;
+	for (const id of heldRuntime()?.worker.running.keys() ?? []) await stopAnalysis(id);
+});
+afterAll(async () => {
+	child?.process.kill('SIGKILL');
 	await open?.close();
-	open = null;
-	child = null;
 });
 
 describe('enqueueAnalysis', () => {
+	beforeAll(openOnce);
 	it('runs the analysis, tells its progress without losing a slope, and keeps the result', async () => {
-		await openSlow(30);
+		script.steps = 30;
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		const events = await watchAll(id);
@@ -65,7 +73,7 @@ describe('enqueueAnalysis', () => {
 	});
 
 	it('tells at most 20 messages a second', async () => {
-		await openSlow(60);
+		script.steps = 60;
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		const start = performance.now();
@@ -75,7 +83,7 @@ describe('enqueueAnalysis', () => {
 	});
 
 	it('starts within a moment, not at the next look into the queue', async () => {
-		await openSlow(MANY);
+		script.steps = MANY;
 		const id = await newAnalysis();
 		const start = performance.now();
 		await enqueueAnalysis(id);
@@ -85,13 +93,12 @@ describe('enqueueAnalysis', () => {
 	});
 
 	it('is refused inside a transaction, where its row is not yet to be seen', async () => {
-		await openSlow(FEW);
 		const id = await newAnalysis();
 		await expect(transaction(() => enqueueAnalysis(id))).rejects.toThrow('after the transaction');
 	});
 
 	it('keeps the sentence of a refusal', async () => {
-		await openSlow(FEW, { treeText: 'refuse' });
+		script.text = 'refuse';
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		const failure = { code: 'too-few-species', message: 'Expected 4 species; got 3.' };
@@ -100,7 +107,7 @@ describe('enqueueAnalysis', () => {
 	});
 
 	it('answers a defect of ours with a reference, not with its text', async () => {
-		await openSlow(FEW, { treeText: 'break' });
+		script.text = 'break';
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		await watchAll(id);
@@ -111,8 +118,9 @@ describe('enqueueAnalysis', () => {
 });
 
 describe('stopAnalysis', () => {
+	beforeAll(openOnce);
 	it('ends a running analysis, tells its watchers and frees its thread for the next', async () => {
-		await openSlow(MANY);
+		script.steps = MANY;
 		const [first, second] = [await newAnalysis(), await newAnalysis()];
 		await enqueueAnalysis(first);
 		await firstProgress(first);
@@ -125,7 +133,7 @@ describe('stopAnalysis', () => {
 	});
 
 	it('takes a waiting analysis out of the queue', async () => {
-		await openSlow(MANY);
+		script.steps = MANY;
 		const [first, second] = [await newAnalysis(), await newAnalysis()];
 		await enqueueAnalysis(first);
 		await firstProgress(first);
@@ -138,8 +146,8 @@ describe('stopAnalysis', () => {
 });
 
 describe('watchAnalysis', () => {
+	beforeAll(openOnce);
 	it('tells the end of an analysis that is over already, and nothing of one that is not there', async () => {
-		await openSlow(FEW);
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		await watchAll(id);
@@ -148,7 +156,7 @@ describe('watchAnalysis', () => {
 	});
 
 	it('gives somebody who comes late every slope so far', async () => {
-		await openSlow(40);
+		script.steps = 40;
 		const id = await newAnalysis();
 		await enqueueAnalysis(id);
 		await firstProgress(id);
@@ -158,36 +166,9 @@ describe('watchAnalysis', () => {
 });
 
 describe('an interrupted analysis', () => {
-	/** Prepares a folder with one waiting analysis, to be worked on by a child process. */
-	async function prepared(): Promise<{ folder: string; id: string; close: () => Promise<void> }> {
-		const first = await openSlow(FEW);
-		const id = await newAnalysis();
-		await runtime().close();
-		child = runChild('workSlowly.ts', [first.folder, id]);
-		await child.says('working');
-		return { folder: first.folder, id, close: first.close };
-	}
-
-	it('is given back on SIGTERM, within 5 s, and runs again at the next start', async () => {
-		const { folder, id } = await prepared();
-		const asked = performance.now();
-		child?.process.kill('SIGTERM');
-		expect(await child?.ended).toEqual({ code: 0, signal: null });
-		expect(performance.now() - asked).toBeLessThan(5_000);
-		await openSlow(FEW, { dataFolder: folder });
-		expect((await watchAll(id)).at(-1)).toEqual({ type: 'finished' });
-	});
-
-	it('is found after kill -9 and runs again at the next start', async () => {
-		const { folder, id } = await prepared();
-		child?.process.kill('SIGKILL');
-		await child?.ended;
-		await openSlow(FEW, { dataFolder: folder });
-		expect((await watchAll(id)).at(-1)).toEqual({ type: 'finished' });
-	});
+	beforeAll(openOnce);
 
 	it('is given up with a sentence when its process died too often', async () => {
-		await openSlow(FEW);
 		const id = await newAnalysis();
 		await interrupt(id, MOST_ATTEMPTS, new Date());
 		await runtime().worker.recover({ all: true });
@@ -195,7 +176,6 @@ describe('an interrupted analysis', () => {
 	});
 
 	it('of another process is left alone while its heart beats, and taken over when it is silent', async () => {
-		await openSlow(FEW);
 		const id = await newAnalysis();
 		await interrupt(id, 1, new Date());
 		await runtime().worker.recover({ all: false });
@@ -209,19 +189,49 @@ describe('an interrupted analysis', () => {
 	});
 
 	it('that never got into the queue is queued at the next start', async () => {
-		await openSlow(FEW);
 		const id = await newAnalysis();
 		await runtime().worker.recover({ all: true });
 		expect((await watchAll(id)).at(-1)).toEqual({ type: 'finished' });
 	});
 });
 
+describe('an analysis whose process ends', () => {
+	/** Prepares a folder with one waiting analysis, to be worked on by a child process. */
+	async function prepared(): Promise<{ folder: string; id: string; child: Child }> {
+		await openOnce();
+		const id = await newAnalysis();
+		const folder = runtime().dataFolder;
+		await runtime().close();
+		const started = runChild('workSlowly.ts', [folder, id]);
+		child = started;
+		await started.says('working');
+		return { folder, id, child: started };
+	}
+
+	it('is given back on SIGTERM, within 5 s, and runs again at the next start', async () => {
+		const { folder, id, child } = await prepared();
+		const asked = performance.now();
+		child.process.kill('SIGTERM');
+		expect(await child.ended).toEqual({ code: 0, signal: null });
+		expect(performance.now() - asked).toBeLessThan(5_000);
+		await openSlow({ dataFolder: folder });
+		expect((await watchAll(id)).at(-1)).toEqual({ type: 'finished' });
+	});
+
+	it('is found after kill -9 and runs again at the next start', async () => {
+		const { folder, id, child } = await prepared();
+		child.process.kill('SIGKILL');
+		await child.ended;
+		await openSlow({ dataFolder: folder });
+		expect((await watchAll(id)).at(-1)).toEqual({ type: 'finished' });
+	});
+});
+
 /** Leaves the analysis as a process that died in the middle of this attempt leaves it. */
 async function interrupt(id: string, attempt: number, heartbeatAt: Date): Promise<void> {
-	const { queue } = runtime();
-	await queue.send({ analysisId: id, attempt });
-	await queue.boss.fetch('analyses');
 	await db().update(analyses).set({ status: 'working', heartbeatAt }).where(eq(analyses.id, id));
+	await runtime().queue.send({ analysisId: id, attempt });
+	await db().execute(sql`update pgboss.job set state = 'active' where data->>'analysisId' = ${id}`);
 }
 
 async function runtimeHas(id: string): Promise<void> {

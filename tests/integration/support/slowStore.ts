@@ -6,16 +6,22 @@ import * as analyses from '#lib/server/repositories/analyses.ts';
 
 export const SLOW_COMPUTE = join(import.meta.dirname, 'slowCompute.mjs');
 
-/** The real repository, but for the inputs: so many steps for a thread that does nothing. `treeText` steers its end. */
-export function slowStore(steps: number, treeText = ''): AnalysisStore {
-	const inputs: AnalysisInputs = {
-		treeText,
-		ageUnit: 'Ma',
-		spreadConfirmed: false,
-		measure: 'schoener-d',
-		overlap: { species: [], lower: new Float64Array(0), remarks: [] },
-		decisions: []
+/** What the thread that does nothing is to do: so many steps; `refuse` and `break` end it otherwise. May change on the way. */
+export type Script = { steps: number; text: string };
+
+/** The real repository, but for the inputs. */
+export function slowStore(script: Script): AnalysisStore {
+	const inputsOf: AnalysisStore['inputsOf'] = async () => {
+		const inputs: AnalysisInputs = {
+			treeText: script.text,
+			ageUnit: 'Ma',
+			spreadConfirmed: false,
+			measure: 'schoener-d',
+			overlap: { species: [], lower: new Float64Array(0), remarks: [] },
+			decisions: []
+		};
+		const plan = planSchema.parse({ treeSet: 't', overlapRun: 'o', tree: 0, seed: 1, permutations: script.steps });
+		return { inputs, plan };
 	};
-	const plan = planSchema.parse({ treeSet: 't', overlapRun: 'o', tree: 0, seed: 1, permutations: steps });
-	return { ...analyses, inputsOf: async () => ({ inputs, plan }) };
+	return { ...analyses, inputsOf };
 }

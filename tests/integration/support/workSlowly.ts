@@ -13,7 +13,7 @@ await openRuntime({
 	workers: 1,
 	command: 'a child',
 	computeFile: SLOW_COMPUTE,
-	store: slowStore(FOREVER)
+	store: slowStore({ steps: FOREVER, text: '' })
 });
 endOnSignal(async () => undefined);
 await enqueueAnalysis(analysis);
