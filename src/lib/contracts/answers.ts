@@ -142,6 +142,7 @@ export const analysisStartedSchema = z.object({ id: z.string(), status, remarks 
 export const analysisAnswerSchema = z.object({
 	id: z.string(),
 	status,
+	/** while it works; null before and after */
 	progress: progressSchema.omit({ newSlopes: true }).nullable(),
 	plan: planSchema,
 	hash: z.string(),

@@ -22,9 +22,9 @@ export function analysisAnswer(analysis: Analysis, changes: Changes): Answer {
 	};
 }
 
-/** The slopes since the last message belong to the stream of events. */
-function progressOf({ progress }: Analysis): Answer['progress'] {
-	if (progress === null) return null;
+/** Only while it works: what is kept of a finished one is older than its end. New slopes belong to the stream of events. */
+function progressOf({ progress, status }: Analysis): Answer['progress'] {
+	if (progress === null || status !== 'working') return null;
 	const { newSlopes: _, ...rest } = progress;
 	return rest;
 }
