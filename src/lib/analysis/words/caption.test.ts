@@ -1,0 +1,27 @@
+import { describe, expect, it } from 'vitest';
+import { microResult } from '../microResult.fixture.ts';
+import { writeCaption } from './caption.ts';
+
+describe('writeCaption', () => {
+	it('names every panel and the numbers a reader judges by', () => {
+		const caption = writeCaption(microResult());
+		for (const panel of ['(a)', '(b)', '(c)', '(d)', '(e)']) expect(caption).toContain(panel);
+		// By hand from the worked example: slope −31/265, two of 24 relabellings, two of six within the deepest split.
+		expect(caption).toContain('Slope −0.117 per Myr, r = −0.95; p = 0.083 (one-sided, falls; all 24 relabellings).');
+		expect(caption).toContain('Within the deepest split p = 0.33.');
+		expect(caption).toContain('4 species, 6 pairs, 3 nodes.');
+	});
+
+	it('says who was left out and what was done to the tips', () => {
+		const result = microResult();
+		const caption = writeCaption({
+			...result,
+			dropped: [{ name: 'L. sericea', in: 'data', why: 'no tip of this name' }],
+			compared: { ...result.compared, levelled: true, polytomies: 2, transform: 'logit' }
+		});
+		expect(caption).toContain('Left out: L. sericea.');
+		expect(caption).toContain('Unresolved nodes: 2.');
+		expect(caption).toContain('Tips were levelled by extending terminal branches.');
+		expect(caption).toContain('Overlap on the logit scale.');
+	});
+});
