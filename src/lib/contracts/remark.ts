@@ -1,5 +1,4 @@
 import { z } from 'zod';
-import type { Remark } from '#lib/remarks/remark.ts';
 
 export const placeSchema = z.object({
 	line: z.number().int().positive().optional(),
@@ -16,8 +15,3 @@ export const remarkSchema = z.object({
 	message: z.string(),
 	where: placeSchema.optional()
 });
-
-/** Reads a stored remark back as the sciences' type. */
-export function asRemark(value: z.infer<typeof remarkSchema>): Remark {
-	return value as Remark;
-}

@@ -9,11 +9,3 @@ export type Station = {
 	readonly state: StationState;
 	readonly href: string;
 };
-
-/** The state in a word, always beside its mark. */
-export const STATION_STATE_WORDS: Readonly<Record<StationState, string>> = {
-	'not-started': 'not started',
-	'needs-you': 'needs you',
-	ready: 'ready',
-	'out-of-date': 'out of date'
-};

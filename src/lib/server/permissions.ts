@@ -6,7 +6,6 @@ import * as logBook from './repositories/logBook.ts';
 import { askedFrom } from './requestScope.ts';
 
 export type { Access } from './access.ts';
-export { systemAccess } from './systemAccess.ts';
 
 const NOT_THERE = 'Nothing at this address, or it is not yours to see.';
 
