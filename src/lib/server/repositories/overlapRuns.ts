@@ -1,4 +1,4 @@
-import { and, desc, eq, getTableColumns, isNull } from 'drizzle-orm';
+import { and, desc, eq, getTableColumns, isNotNull, isNull } from 'drizzle-orm';
 import { matrixSchema, type Confirm, type OverlapRunRequest } from '#lib/contracts/materials.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import { matrixFromBody, readMatrix } from '#lib/overlap/readMatrix.ts';
@@ -21,6 +21,16 @@ export async function list(access: Access): Promise<ListedRun[]> {
 		.from(overlapRuns)
 		.where(and(within(access, overlapRuns.studyId), isNull(overlapRuns.deletedAt)))
 		.orderBy(desc(overlapRuns.createdAt), desc(overlapRuns.id));
+	return rows.map(listedRun);
+}
+
+/** What was deleted or replaced, the last first, without the values. */
+export async function listDeleted(access: Access): Promise<ListedRun[]> {
+	const rows = await db()
+		.select(listedColumns)
+		.from(overlapRuns)
+		.where(and(within(access, overlapRuns.studyId), isNotNull(overlapRuns.deletedAt)))
+		.orderBy(desc(overlapRuns.deletedAt));
 	return rows.map(listedRun);
 }
 

@@ -1,4 +1,4 @@
-import { and, desc, eq, isNull } from 'drizzle-orm';
+import { and, desc, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { TreeSetRequest } from '#lib/contracts/materials.ts';
 import { personOf, studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
@@ -18,6 +18,16 @@ export async function list(access: Access): Promise<TreeSet[]> {
 		.from(treeSets)
 		.where(and(within(access, treeSets.studyId), isNull(treeSets.deletedAt)))
 		.orderBy(desc(treeSets.createdAt), desc(treeSets.id));
+	return rows.map(treeSetFromRow);
+}
+
+/** What was deleted or replaced, the last first. */
+export async function listDeleted(access: Access): Promise<TreeSet[]> {
+	const rows = await db()
+		.select()
+		.from(treeSets)
+		.where(and(within(access, treeSets.studyId), isNotNull(treeSets.deletedAt)))
+		.orderBy(desc(treeSets.deletedAt));
 	return rows.map(treeSetFromRow);
 }
 

@@ -1,0 +1,140 @@
+import { error, fail, redirect } from '@sveltejs/kit';
+import {
+	confirmOf,
+	materialForm,
+	renameMaterialForm,
+	settleMaterialForm,
+	type MaterialName
+} from '#lib/contracts/materialForms.ts';
+import { InputError } from '#lib/remarks/inputError.ts';
+import { Refusal } from '#lib/server/api/refusal.ts';
+import { startAnalysis } from '#lib/server/api/startAnalysis.ts';
+import { parseForm } from '#lib/server/parseForm.ts';
+import { can, type Access } from '#lib/server/permissions.ts';
+import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import type { RequestEvent } from './$types';
+import { keepCorrected } from './printedForm.server.ts';
+import { staleAnalyses, type Stale } from './staleAnalyses.ts';
+
+const NOT_FOUND = 'That material is not in this study any more.';
+const repositoryOf = ({ kind }: MaterialName) => (kind === 'trees' ? treeSets : overlapRuns);
+const pageOf = (study: string, query = '') => `/studies/${study}/materials${query}`;
+
+export async function renameMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'change', { study: params.study });
+	const form = await parseForm(request, renameMaterialForm);
+	if (!form.ok)
+		return fail(400, {
+			care: { material: form.values['material'] ?? '', values: form.values, message: form.faults['label'] ?? NOT_FOUND }
+		});
+	const { material, label } = form.value;
+	if (!(await repositoryOf(material).rename(access, material.id, label))) error(404, NOT_FOUND);
+	redirect(303, pageOf(params.study));
+}
+
+export async function removeMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'delete', { study: params.study });
+	const form = await parseForm(request, materialForm);
+	if (!form.ok || !(await repositoryOf(form.value.material).remove(access, form.value.material.id))) error(404, NOT_FOUND);
+	redirect(303, pageOf(params.study, `?deleted=${form.value.material.id}`));
+}
+
+export async function restoreMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'restore', { study: params.study });
+	const form = await parseForm(request, materialForm);
+	if (!form.ok || !(await repositoryOf(form.value.material).restore(access, form.value.material.id))) error(404, NOT_FOUND);
+	redirect(303, pageOf(params.study));
+}
+
+/** Answers what a kept material still asks. */
+export async function settleMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'change', { study: params.study });
+	const form = await parseForm(request, settleMaterialForm);
+	if (!form.ok)
+		return fail(400, {
+			care: { material: form.values['material'] ?? '', values: form.values, message: Object.values(form.faults)[0] ?? NOT_FOUND }
+		});
+	const { material, ...answers } = form.value;
+	const confirm = confirmOf(answers);
+	const care = { material: `${material.kind}:${material.id}`, values: {} };
+	if (Object.keys(confirm).length === 0) return fail(400, { care: { ...care, message: 'Choose an answer first.' } });
+	try {
+		const settled =
+			material.kind === 'trees'
+				? await treeSets.confirmSpread(access, material.id)
+				: await settleRun(access, material.id, confirm);
+		if (!settled) error(404, NOT_FOUND);
+	} catch (thrown) {
+		if (!(thrown instanceof InputError)) throw thrown;
+		return fail(422, { care: { ...care, message: thrown.message } });
+	}
+	redirect(303, pageOf(params.study));
+}
+
+/** What the text was read as stays as it is, where it is not asked about. */
+async function settleRun(access: Access, id: string, confirm: ReturnType<typeof confirmOf>): Promise<boolean> {
+	const run = await overlapRuns.findListed(access, id);
+	if (run === null) return false;
+	const isSure = (...codes: string[]) => !run.remarks.some(({ code }) => codes.includes(code));
+	const { kind, scale } = run.reading;
+	const read = {
+		...(isSure('similarity-or-distance', 'similarity-assumed', 'negative-overlap') &&
+		(kind === 'similarity' || kind === 'distance')
+			? { kind }
+			: {}),
+		...(isSure('percent-or-fraction') && (scale === 'fraction' || scale === 'percent') ? { scale } : {})
+	};
+	return overlapRuns.settle(access, id, { ...read, ...confirm });
+}
+
+export async function correctMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'create', { study: params.study });
+	const form = await parseForm(request, materialForm);
+	if (!form.ok) error(404, NOT_FOUND);
+	try {
+		const id = await keepCorrected(access, form.value.material.id);
+		if (id === null) error(404, NOT_FOUND);
+		redirect(303, pageOf(params.study, `?kept=${id}`));
+	} catch (thrown) {
+		if (!(thrown instanceof InputError)) throw thrown;
+		return fail(422, { care: { material: `matrix:${form.value.material.id}`, values: {}, message: thrown.message } });
+	}
+}
+
+/** Runs every analysis again that rested on what this material replaced. */
+export async function runAgain({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'run', { study: params.study });
+	const form = await parseForm(request, materialForm);
+	if (!form.ok) error(404, NOT_FOUND);
+	const { id, kind } = form.value.material;
+	const materials = [
+		await treeSets.list(access),
+		await treeSets.listDeleted(access),
+		await overlapRuns.list(access),
+		await overlapRuns.listDeleted(access)
+	];
+	const stale = staleAnalyses(await analyses.list(access), materials.flat()).filter(
+		({ renewed }) => renewed.treeSet === id || renewed.overlapRun === id
+	);
+	const refused: string[] = [];
+	for (const one of stale) {
+		const message = await renew(access, one);
+		if (message !== null) refused.push(message);
+	}
+	if (refused.length > 0)
+		return fail(422, { care: { material: `${kind}:${id}`, values: {}, message: [...new Set(refused)].join(' ') } });
+	redirect(303, `/studies/${params.study}/analyses`);
+}
+
+/** @returns the sentence of a refusal, null when it waits to run */
+async function renew(access: Access, { renewed }: Stale): Promise<string | null> {
+	try {
+		await startAnalysis(access, renewed);
+		return null;
+	} catch (thrown) {
+		if (thrown instanceof InputError || thrown instanceof Refusal) return thrown.message;
+		throw thrown;
+	}
+}

@@ -1,0 +1,118 @@
+import { answersForm, keepForm, type Answers } from '#lib/contracts/materialForms.ts';
+import { InputError } from '#lib/remarks/inputError.ts';
+import type { Place } from '#lib/remarks/remark.ts';
+import type { Access } from '#lib/server/access.ts';
+import { Refusal } from '#lib/server/api/refusal.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import type { z } from 'zod';
+import type { Draft, Refused } from './draft.ts';
+import { excerpt } from './excerpt.ts';
+import { guessMeasure } from './guessMeasure.ts';
+import { lookAtMatrix, overlapRunRequest } from './lookAtMatrix.server.ts';
+import { lookAtTrees, treeSetRequest } from './lookAtTrees.server.ts';
+import { proposeLabel } from './proposeLabel.ts';
+import { textOf, type Upload } from './readUpload.server.ts';
+import { recogniseText } from './recogniseText.ts';
+
+type Kind = 'trees' | 'matrix';
+
+/** A text as the program understands it; what cannot be read is told in the draft, with the text. */
+export async function lookAt(upload: Upload): Promise<Draft> {
+	const given = withGuesses(upload);
+	const parsed = answersForm.safeParse(given);
+	const faults = parsed.success ? {} : faultsOf(parsed.error);
+	const answers = parsed.success ? parsed.data : answersForm.parse({ readAs: given['readAs'] ?? '' });
+	const { text, kind, seen } = await seenIn(upload, answers, given);
+	const label = given['label'] || proposeLabel(upload.name, kind, given['measure']);
+	return { name: upload.name, text, label, answers: given, seen, faults };
+}
+
+type Seen = { readonly text: string; readonly kind: Kind | null; readonly seen: Draft['seen'] };
+
+async function seenIn(upload: Upload, answers: Answers, given: Draft['answers']): Promise<Seen> {
+	let text = '';
+	let kind: Kind | null = null;
+	try {
+		text = textOf(upload);
+		kind = kindOf(text, answers);
+		return { text, kind, seen: kind === 'trees' ? await lookAtTrees(text, answers, given) : lookAtMatrix(text, answers, given) };
+	} catch (thrown) {
+		return { text, kind, seen: refusedBy(thrown, text, kind) };
+	}
+}
+
+function kindOf(text: string, { readAs }: Answers): Kind {
+	if (readAs !== undefined) return readAs;
+	const recognised = recogniseText(text);
+	if (recognised !== 'rich-text') return recognised;
+	throw new InputError(
+		'rich-text',
+		'Expected plain text; this is a word processor’s file. Open it, choose Save as, and save it as plain text.'
+	);
+}
+
+function withGuesses({ name, fields }: Upload): Record<string, string> {
+	const { measure, ...rest } = fields;
+	const chosen = measure ?? guessMeasure(name) ?? '';
+	return { ...rest, measure: chosen };
+}
+
+function refusedBy(thrown: unknown, text: string, kind: Kind | null): Refused {
+	if (!(thrown instanceof InputError) && !(thrown instanceof Refusal)) throw thrown;
+	const where: Place | undefined = thrown instanceof InputError ? thrown.where : undefined;
+	return {
+		...{ kind: 'refused', readAs: kind, code: thrown.code, message: thrown.message },
+		excerpt: excerpt(text, where, kind === 'matrix' ? 'cells' : 'signs'),
+		place: where?.line === undefined ? null : { line: where.line, column: kind === 'trees' ? (where.column ?? null) : null }
+	};
+}
+
+function faultsOf(error: z.ZodError): Record<string, string> {
+	return Object.fromEntries(error.issues.map(({ path, message }) => [String(path[0] ?? 'form'), message]).reverse());
+}
+
+export type Kept =
+	{ readonly ok: true; readonly kind: Kind; readonly id: string } | { readonly ok: false; readonly draft: Draft };
+
+/** Keeps a text that was looked at, in the place of another material where one is named; refused, it comes back as a draft. */
+export async function keep(access: Access, upload: Upload, replaces: { kind: Kind; id: string } | null): Promise<Kept> {
+	const draft = await lookAt(upload);
+	const parsed = keepForm.safeParse({ ...draft.answers, label: draft.answers['label'] ?? '' });
+	if (!parsed.success)
+		return { ok: false, draft: { ...draft, label: upload.fields['label'] ?? '', faults: faultsOf(parsed.error) } };
+	const { kind } = draft.seen;
+	if (kind === 'refused') return { ok: false, draft };
+	if (replaces !== null && replaces.kind !== kind) return { ok: false, draft: { ...draft, faults: { form: otherKind(kind) } } };
+	if (kind === 'matrix' && parsed.data.measure === undefined) {
+		return { ok: false, draft: { ...draft, faults: { measure: 'Choose the measure; the report names it.' } } };
+	}
+	const id = await store(access, { kind, replaces: replaces?.id ?? null, text: draft.text }, parsed.data);
+	return id === null
+		? { ok: false, draft: { ...draft, faults: { form: 'What it should replace is not in this study any more.' } } }
+		: { ok: true, kind, id };
+}
+
+function otherKind(kind: Kind): string {
+	return kind === 'trees'
+		? 'A matrix can be replaced by a matrix only; this text holds trees. Keep it beside the matrix instead.'
+		: 'A tree can be replaced by a tree only; this text is a matrix. Keep it beside the tree instead.';
+}
+
+type Keeping = { readonly kind: Kind; readonly replaces: string | null; readonly text: string };
+
+async function store(
+	access: Access,
+	{ kind, replaces, text }: Keeping,
+	{ label, ...answers }: Answers & { label: string }
+): Promise<string | null> {
+	if (kind === 'trees') {
+		const request = treeSetRequest(label, text, answers);
+		const kept = replaces === null ? await treeSets.create(access, request) : await treeSets.replace(access, replaces, request);
+		return kept?.id ?? null;
+	}
+	const request = overlapRunRequest(label, text, answers);
+	const kept =
+		replaces === null ? await overlapRuns.create(access, request) : await overlapRuns.replace(access, replaces, request);
+	return kept?.id ?? null;
+}

@@ -1,0 +1,101 @@
+import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
+import type { MaterialName } from '#lib/contracts/materialForms.ts';
+import type { Remark } from '#lib/remarks/remark.ts';
+import type { Access } from '#lib/server/access.ts';
+import * as analyses from '#lib/server/repositories/analyses.ts';
+import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import type { TreeSet } from '#lib/server/repositories/treeSetRows.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { tinyWing } from '../tinyWing.ts';
+import { drawTreeSet } from './drawTree.server.ts';
+import { counted, treeFactWords, treeKindWords } from './materialWords.ts';
+import { matrixSettleQuestions, treeSettleQuestions } from './questions.ts';
+import { staleAnalyses } from './staleAnalyses.ts';
+import { printedFormRemark } from './printedForm.server.ts';
+
+/** What is kept of a study, what was deleted, and what rests on a material that was replaced. */
+export async function materialsPage(access: Access, { withDeleted }: { withDeleted: boolean }) {
+	const [trees, runs] = [await treeSets.list(access), await overlapRuns.list(access)];
+	const gone = [...(await treeSets.listDeleted(access)), ...(await overlapRuns.listDeleted(access))];
+	const asked = await analyses.list(access);
+	const stale = staleAnalyses(asked, [...trees, ...runs, ...gone]);
+	const uses: Uses = {
+		usedBy: (id) => asked.filter(({ treeSetId, overlapRunId }) => treeSetId === id || overlapRunId === id).length,
+		staleFor: (id) => stale.filter(({ renewed }) => renewed.treeSet === id || renewed.overlapRun === id).length
+	};
+	const printed = await printedFormRemark(access, runs);
+	return {
+		trees: await Promise.all(trees.map((set) => keptTree(set, uses))),
+		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed }))),
+		deleted: withDeleted ? gone.map((material) => goneLine(material, [...trees, ...runs])) : []
+	};
+}
+
+export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs'][number];
+
+type Uses = { readonly usedBy: (id: string) => number; readonly staleFor: (id: string) => number };
+
+async function keptTree(set: TreeSet, { usedBy, staleFor }: Uses) {
+	const { id, label, kind, treeCount, createdAt, remarks } = set;
+	return {
+		...{ kind: 'trees' as const, id, label, at: createdAt, remarks },
+		facts: [treeKindWords(kind, treeCount), ...treeFactWords(set)],
+		...{ usedBy: usedBy(id), stale: staleFor(id) },
+		questions: treeSettleQuestions(remarks, {}),
+		drawing: await drawTreeSet(set),
+		wing: null,
+		offersCorrection: false
+	};
+}
+
+type RunFrame = Uses & {
+	readonly order: readonly string[];
+	readonly printed: { readonly run: string; readonly remark: Remark } | null;
+};
+
+async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order, printed }: RunFrame) {
+	const { id, label, measure, createdAt, species } = run;
+	const remarks = printed?.run === id ? [printed.remark, ...run.remarks] : run.remarks;
+	const whole = await overlapRuns.find(access, id);
+	return {
+		...{ kind: 'matrix' as const, id, label, at: createdAt, remarks },
+		facts: [
+			measure === 'other' ? 'another measure of overlap' : MEASURE_NAMES[measure],
+			counted(species.length, 'species', 'species'),
+			missingWords(whole?.lower)
+		],
+		...{ usedBy: usedBy(id), stale: staleFor(id) },
+		questions: matrixSettleQuestions(run.remarks, {}).filter(({ isOpen }) => isOpen),
+		drawing: null,
+		wing: whole === null ? null : tinyWing(whole, order),
+		offersCorrection: printed?.run === id && printed.remark.code === 'uncorrected-i'
+	};
+}
+
+function missingWords(lower: Float64Array = new Float64Array()): string {
+	let missing = 0;
+	for (const value of lower) if (Number.isNaN(value)) missing += 1;
+	return missing === 0
+		? counted(lower.length, 'pair', 'pairs')
+		: `${counted(missing, 'pair', 'pairs')} missing of ${counted(lower.length, 'pair', 'pairs')}`;
+}
+
+function goneLine(material: TreeSet | ListedRun, kept: readonly (TreeSet | ListedRun)[]) {
+	const kind = 'tips' in material ? ('trees' as const) : ('matrix' as const);
+	const heir = kept.find(({ replaces }) => replaces === material.id);
+	return {
+		kind,
+		id: material.id,
+		label: material.label,
+		at: material.deletedAt ?? material.createdAt,
+		replacedBy: heir?.label ?? null
+	};
+}
+
+/** The material a new text shall replace, as the address names it. */
+export async function replacing(access: Access, name: MaterialName | null) {
+	if (name === null) return null;
+	const found = name.kind === 'trees' ? await treeSets.find(access, name.id) : await overlapRuns.findListed(access, name.id);
+	return found === null || found.deletedAt !== null ? null : { ...name, label: found.label };
+}

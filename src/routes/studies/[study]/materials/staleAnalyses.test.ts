@@ -1,0 +1,40 @@
+import { describe, expect, it } from 'vitest';
+import { planSchema } from '#lib/contracts/plan.ts';
+import { staleAnalyses } from './staleAnalyses.ts';
+
+const plan = (treeSet: string, overlapRun: string, seed = 1) => planSchema.parse({ treeSet, overlapRun, tree: 0, seed });
+const material = (id: string, replaces: string | null = null, deletedAt: string | null = null) => ({ id, replaces, deletedAt });
+const GONE = '2026-01-01T00:00:00.000Z';
+
+// Expected lists by hand.
+describe('staleAnalyses', () => {
+	it('names no analysis whose materials still stand', () => {
+		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], [material('t1'), material('r1')])).toEqual([]);
+	});
+
+	it('gives the plan with what took the place, through several replacements and on both sides', () => {
+		const materials = [
+			material('t1', null, GONE),
+			material('t2', 't1', GONE),
+			material('t3', 't2'),
+			material('r1', null, GONE),
+			material('r2', 'r1')
+		];
+		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], materials)).toEqual([{ id: 'a', renewed: plan('t3', 'r2') }]);
+	});
+
+	it('leaves out what was run again already, and keeps what was asked with another seed', () => {
+		const materials = [material('t1', null, GONE), material('t2', 't1'), material('r1')];
+		const asked = [
+			{ id: 'old', plan: plan('t1', 'r1') },
+			{ id: 'new', plan: plan('t2', 'r1') },
+			{ id: 'other', plan: plan('t1', 'r1', 2) }
+		];
+		expect(staleAnalyses(asked, materials).map(({ id }) => id)).toEqual(['other']);
+	});
+
+	it('lists nothing where the new material was deleted too', () => {
+		const materials = [material('t1', null, GONE), material('t2', 't1', GONE), material('r1')];
+		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], materials)).toEqual([]);
+	});
+});
