@@ -1,0 +1,41 @@
+import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
+import type { Access } from '#lib/server/access.ts';
+import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
+import type { Report } from '#lib/server/repositories/reports.ts';
+import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { version } from '#lib/server/version.ts';
+import { fourFigures } from '../../analyses/[analysis]/fourFigures.ts';
+import { comparedFacts, planFacts } from '../../analyses/[analysis]/planFacts.ts';
+import { testFacts } from '../../analyses/[analysis]/testFacts.ts';
+
+/** A report as it will print: its words, and everything of the analysis that it rests on. */
+export async function reportPage(access: Access, report: Report) {
+	const { id, title, caption, notes, figure, author, createdAt, changedAt, captionEdited } = report;
+	const analysis = await analyses.find(access, report.analysisId);
+	const words = { id, title, caption, notes, figure, author, createdAt, changedAt, captionEdited, analysisId: report.analysisId };
+	// The analysis of a report may be deleted for a while; its words stay readable.
+	if (analysis?.result == null) return { report: words, found: null };
+	const { plan, hash, decisions, declaredAt, finishedAt } = analysis;
+	const tree = await treeSets.findKept(access, analysis.treeSetId);
+	const run = await overlapRuns.findListed(access, analysis.overlapRunId);
+	if (tree === null || run === null) throw new Error(`Expected the materials of analysis ${analysis.id}; one is not there.`);
+	return {
+		report: words,
+		found: {
+			...resultWords(analysis.result),
+			...{ decisions, hash, declaredAt, finishedAt },
+			facts: [...comparedFacts({ tree, run }, plan), ...planFacts(plan)],
+			materials: [
+				{ what: 'Tree', label: tree.label, textHash: tree.textHash },
+				{ what: 'Overlaps', label: run.label, textHash: run.textHash }
+			],
+			version: version()
+		}
+	};
+}
+
+function resultWords(result: AnalysisResult) {
+	const { finding, dropped, engine } = result;
+	return { finding, dropped, engine, figures: fourFigures(result), groups: testFacts(result) };
+}
