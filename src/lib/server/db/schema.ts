@@ -1,5 +1,18 @@
 import { sql } from 'drizzle-orm';
-import { bigint, bigserial, boolean, customType, index, integer, jsonb, pgTable, primaryKey, text, timestamp, uniqueIndex } from 'drizzle-orm/pg-core';
+import {
+	bigint,
+	bigserial,
+	boolean,
+	customType,
+	index,
+	integer,
+	jsonb,
+	pgTable,
+	primaryKey,
+	text,
+	timestamp,
+	uniqueIndex
+} from 'drizzle-orm/pg-core';
 import type { AnalysisProgress, AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
