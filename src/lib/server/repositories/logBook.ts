@@ -1,6 +1,6 @@
 import { and, asc, desc, eq, gt, sql } from 'drizzle-orm';
 import { createHash } from 'node:crypto';
-import { labOf, studyOf, type Access } from '#lib/server/access.ts';
+import { studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
 import { logEntries } from '#lib/server/db/schema.ts';
 
@@ -101,15 +101,6 @@ export function ofStudy(access: Access, limit = 200): Promise<LoggedEntry[]> {
 		.select()
 		.from(logEntries)
 		.where(eq(logEntries.studyId, studyOf(access)))
-		.orderBy(desc(logEntries.id))
-		.limit(limit);
-}
-
-export function ofLab(access: Access, limit = 200): Promise<LoggedEntry[]> {
-	return db()
-		.select()
-		.from(logEntries)
-		.where(eq(logEntries.labId, labOf(access)))
 		.orderBy(desc(logEntries.id))
 		.limit(limit);
 }
