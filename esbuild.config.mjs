@@ -4,7 +4,7 @@
  * `node esbuild.config.mjs build` writes everything a production folder needs into build/.
  */
 import { context, build } from 'esbuild';
-import { existsSync, readdirSync } from 'node:fs';
+import { existsSync, readFileSync, readdirSync } from 'node:fs';
 import { resolve } from 'node:path';
 
 const root = import.meta.dirname;
@@ -13,7 +13,12 @@ const shared = {
 	platform: 'node',
 	format: 'esm',
 	target: 'node20',
-	packages: 'external',
+	// What production installs stays outside; the one development package the commands touch (the site's kit) comes along.
+	external: Object.keys(JSON.parse(readFileSync(resolve(root, 'package.json'), 'utf8')).dependencies),
+	// Some packages inside a bundle still call require().
+	banner: {
+		js: "import { createRequire as __createRequire } from 'node:module'; const require = __createRequire(import.meta.url);"
+	},
 	sourcemap: true,
 	logLevel: 'warning'
 };
@@ -25,7 +30,11 @@ export function computeBundle() {
 		name: 'kithline-compute-bundle',
 		async buildStart() {
 			if (!existsSync(compute)) return;
-			const watched = await context({ ...shared, entryPoints: [compute], outfile: resolve(root, '.svelte-kit/kithline/compute.mjs') });
+			const watched = await context({
+				...shared,
+				entryPoints: [compute],
+				outfile: resolve(root, '.svelte-kit/kithline/compute.mjs')
+			});
 			await watched.rebuild();
 			if (this.meta?.watchMode && process.env.NODE_ENV === 'development') await watched.watch();
 			else await watched.dispose();
