@@ -24,7 +24,10 @@ export async function lookAt(upload: Upload): Promise<Draft> {
 	const faults = parsed.success ? {} : faultsOf(parsed.error);
 	const answers = parsed.success ? parsed.data : answersForm.parse({ readAs: given['readAs'] ?? '' });
 	const { text, kind, seen } = await seenIn(upload, answers, given);
-	const label = given['label'] || proposeLabel(upload.name, kind, given['measure']);
+	const typed = given['label'] ?? '';
+	// A name nobody has touched follows what is learnt about the text.
+	const isUntouched = typed === '' || typed === proposeLabel(upload.name, kind, undefined);
+	const label = isUntouched ? proposeLabel(upload.name, kind, given['measure']) : typed;
 	return { name: upload.name, text, label, answers: given, seen, faults };
 }
 

@@ -51,4 +51,10 @@ describe('matrixQuestions', () => {
 		const all = ['similarity-or-distance', 'percent-or-fraction', 'asymmetric'].map((code) => remark('settle', code, ''));
 		expect(names(matrixQuestions(all, {}))).toEqual(['measure', 'valueKind', 'scale']);
 	});
+
+	it('asks what is left once the first are answered', () => {
+		const rest = [remark('settle', 'asymmetric', '')];
+		const asked = matrixQuestions(rest, { measure: 'other', valueKind: 'distance', scale: 'percent' });
+		expect(names(asked)).toEqual(['measure', 'triangle', 'valueKind']);
+	});
 });

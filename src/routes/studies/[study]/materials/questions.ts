@@ -14,6 +14,9 @@ export type Field =
 	| { readonly type: 'number'; readonly name: string; readonly label: string; readonly value: string; readonly least: number }
 	| { readonly type: 'tick'; readonly name: string; readonly label: string; readonly value: string };
 
+/** Answers that a draft carries on when their question is not shown any more. */
+export const SETTLING_FIELDS = ['valueKind', 'scale', 'triangle', 'spread'] as const;
+
 /** One question as a sentence with its answers in it. */
 export type Question = {
 	readonly parts: readonly (string | Field)[];
@@ -34,9 +37,10 @@ export function treeQuestions(isSeveral: boolean, remarks: readonly Remark[], gi
 	return [...questions, ...treeSettleQuestions(remarks, given)];
 }
 
-/** What is asked about a matrix: the measure, and how doubtful values are meant. */
+/** What is asked about a matrix: the measure, and how doubtful values are meant, what has no answer yet before the rest. */
 export function matrixQuestions(remarks: readonly Remark[], given: Given): Question[] {
-	return [measureQuestion(given), ...matrixSettleQuestions(remarks, given)].slice(0, MOST_QUESTIONS);
+	const doubts = matrixSettleQuestions(remarks, given).sort((a, b) => Number(b.isOpen) - Number(a.isOpen));
+	return [measureQuestion(given), ...doubts].slice(0, MOST_QUESTIONS);
 }
 
 /** A question stays as long as its remark does, or its answer. */

@@ -29,7 +29,7 @@ export async function readUpload(request: Request): Promise<Upload> {
 	);
 	const file = form.get('file');
 	if (file instanceof File && (file.size > 0 || file.name !== '')) {
-		return { name: fields['name'] || file.name, source: new Uint8Array(await file.arrayBuffer()), fields };
+		return { name: fields['name'] ?? file.name, source: new Uint8Array(await file.arrayBuffer()), fields };
 	}
 	const text = form.get('text');
 	// A form sends every line end as CR LF; the text is kept as it was typed.
