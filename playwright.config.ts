@@ -19,6 +19,7 @@ export default defineConfig({
 		command: 'node build/commands/demo.mjs',
 		url: `http://127.0.0.1:${port}/health`,
 		timeout: 120_000,
+		reuseExistingServer: !process.env.CI,
 		env: { PORT: String(port), HOST: '127.0.0.1', KITHLINE_DATA: 'test-results/data-browser' },
 		gracefulShutdown: { signal: 'SIGTERM', timeout: 8_000 }
 	}

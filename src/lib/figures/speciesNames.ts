@@ -1,24 +1,28 @@
 /**
- * Names as a figure prints them: blanks for underscores and, when asked, the genus shortened to its initial. A genus
- * keeps its full name when another genus of the figure has the same initial, and a name of one word stays whole.
+ * Names as a figure prints them: blanks for underscores and, when asked, the genus shortened to its initial, for all of
+ * them or for none: where two genera share an initial every name stays whole, since a list half shortened reads as if
+ * the short ones were special. A name of one word stays as it is.
  */
 export function figureNames(species: readonly string[], abbreviate: boolean): string[] {
 	const shown = species.map((name) => name.replaceAll('_', ' ').trim());
 	if (!abbreviate) return shown;
-	const generaByInitial = new Map<string, Set<string>>();
+	const genusByInitial = new Map<string, string>();
 	for (const name of shown) {
 		const [genus, epithet] = firstWord(name);
 		if (epithet === '') continue;
-		const initial = [...genus][0] ?? '';
-		generaByInitial.set(initial, (generaByInitial.get(initial) ?? new Set()).add(genus));
+		const initial = initialOf(genus);
+		if ((genusByInitial.get(initial) ?? genus) !== genus) return shown;
+		genusByInitial.set(initial, genus);
 	}
 	const short = shown.map((name) => {
 		const [genus, epithet] = firstWord(name);
-		const initial = [...genus][0] ?? '';
-		const unambiguous = epithet !== '' && (generaByInitial.get(initial)?.size ?? 0) === 1;
-		return unambiguous ? `${initial}. ${epithet}` : name;
+		return epithet === '' ? name : `${initialOf(genus)}. ${epithet}`;
 	});
 	return new Set(short).size === short.length ? short : shown;
+}
+
+function initialOf(genus: string): string {
+	return [...genus][0] ?? '';
 }
 
 /** A clade is called by its first and last species; without the genus where every name of the figure has the same one. */

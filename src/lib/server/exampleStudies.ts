@@ -28,7 +28,7 @@ const EXAMPLES: readonly Example[] = [
 		folder: 'moss-beetles',
 		title: 'Moss beetles of the Merrow Range',
 		question: 'Have moss beetles that parted recently kept similar niches?',
-		trees: [{ file: 'summary-tree.nwk', label: 'Summary tree', kind: 'summary' }],
+		trees: [{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }],
 		seed: 20262
 	},
 	{
@@ -37,7 +37,7 @@ const EXAMPLES: readonly Example[] = [
 		question: 'Have lanternfrogs that parted recently kept similar niches?',
 		trees: [
 			{ file: 'posterior-trees.nex', label: '200 posterior trees', kind: 'posterior' },
-			{ file: 'summary-tree.nwk', label: 'Summary tree', kind: 'summary' }
+			{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }
 		],
 		seed: 20261
 	}
