@@ -60,14 +60,19 @@ export function wordsOf<Value>(choices: readonly Choice<Value>[], value: string)
 	return choices.find((choice) => choice.value === value)?.words ?? value;
 }
 
+/** “Schoener’s D of “shared cells””, or the label alone where it names the measure itself. */
 export function measureWords({ measure, label }: { readonly measure: Measure; readonly label: string }): string {
-	return `${MEASURE_NAMES[measure]} of “${label}”`;
+	const name = MEASURE_NAMES[measure];
+	return label.replaceAll("'", '’').includes(name) ? label : `${name} of “${label}”`;
 }
 
 type Trees = { readonly label: string; readonly treeCount: number };
 
+/** Words that a label begins with in a capital only because it stands alone. */
+const COMMON_WORD = /^(Summary|Consensus|Dated|Species|Posterior|Time)(?= )/;
+
 /** “the summary tree”, or which tree of a set. */
 export function treeWords({ label, treeCount }: Trees, tree: number): string {
-	const name = /^(the|a|an)\s/i.test(label) ? label : `the ${label}`;
+	const name = /^(the|a|an)\s/i.test(label) ? label : `the ${label.replace(COMMON_WORD, (word) => word.toLowerCase())}`;
 	return treeCount === 1 ? name : `tree ${tree} of “${label}”`;
 }
