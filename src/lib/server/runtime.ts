@@ -13,6 +13,16 @@ import { sweepTurns } from './rateLimit.ts';
 import * as analyses from './repositories/analyses.ts';
 import { keptSecret } from './secret.ts';
 
+/** Named one by one, so that a reader and the check for unused code see who calls them. */
+const STORE: AnalysisStore = {
+	inputsOf: analyses.inputsOf,
+	markWorking: analyses.markWorking,
+	saveProgress: analyses.saveProgress,
+	markFinished: analyses.markFinished,
+	markStopped: analyses.markStopped,
+	markFailed: analyses.markFailed
+};
+
 export type RuntimeOptions = Pick<Environment, 'dataFolder' | 'databaseUrl' | 'authSecret' | 'workers'> & {
 	/** named to a second process that wants the same folder */
 	readonly command: string;
@@ -74,7 +84,7 @@ async function openParts(options: RuntimeOptions, steps: Closing[]): Promise<Run
 	const progress = new EventEmitter().setMaxListeners(0);
 	// One thread stays free for readings and previews that somebody waits for.
 	const capacity = (options.works ?? true) ? Math.max(1, threads - 1) : 0;
-	const worker = openAnalysisWorker({ queue, store: options.store ?? analyses, progress, capacity });
+	const worker = openAnalysisWorker({ queue, store: options.store ?? STORE, progress, capacity });
 	steps.unshift(worker.close);
 	const sweeping = setInterval(() => void sweepTurns().catch(logSweep), SWEEP_EVERY_MS).unref();
 	steps.unshift(() => clearInterval(sweeping));

@@ -46,9 +46,9 @@ function leftOutCount({ dropped }: NameMatching): number {
 	return dropped.filter((name) => name.in === 'data').length;
 }
 
-function settledLine({ species = null, tip = null, kind, reason, decision }: NameRow, held: names.CurrentDecision | undefined) {
+function settledLine({ species, tip, kind, reason, decision }: NameRow, held: names.CurrentDecision | undefined) {
 	return {
-		...{ species, tip, kind, reason, isDecided: decision !== undefined },
+		...{ species: species ?? null, tip: tip ?? null, kind, reason, isDecided: decision !== undefined },
 		why: decision?.why ?? '',
 		by: held?.decidedBy ?? null,
 		at: held?.decidedAt ?? null

@@ -31,10 +31,18 @@ export function openNames(rows: readonly NameRow[]): OpenName[] {
 	return [...others, ...leftOver, ...apart].sort((a, b) => ORDER.indexOf(a.kind) - ORDER.indexOf(b.kind));
 }
 
-function asOpen({ species = null, tip, candidates, kind, reason, differences = null, decision }: NameRow): OpenName {
+function asOpen({ species, tip, candidates, kind, reason, differences, decision }: NameRow): OpenName {
 	const tips = candidates ?? (tip === undefined ? [] : [tip]);
 	const open = kind === 'probable' || kind === 'only-in-data' ? kind : 'twice';
-	return { key: `species ${species ?? ''}`, kind: open, species, tips, reason, differences, isDecided: decision !== undefined };
+	return {
+		key: `species ${species ?? ''}`,
+		kind: open,
+		species: species ?? null,
+		tips,
+		reason,
+		differences: differences ?? null,
+		isDecided: decision !== undefined
+	};
 }
 
 function pairLeftOver(species: string, tips: readonly string[]): OpenName {
