@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { remarkSchema } from './remark.ts';
 import { AGE_UNITS } from './materials.ts';
-import { measureSchema } from './measure.ts';
+import { measureSchema } from './measureSchema.ts';
 import { ALTERNATIVES, STATISTICS } from './plan.ts';
 
 const probability = z.number().min(0).max(1);

@@ -1,7 +1,7 @@
 import { z } from 'zod';
 import { analysisResultSchema, progressSchema } from './analysisResult.ts';
 import { AGE_UNITS, ANALYSIS_STATUSES, TREE_SET_KINDS } from './materials.ts';
-import { measureSchema } from './measure.ts';
+import { measureSchema } from './measureSchema.ts';
 import { planSchema } from './plan.ts';
 import { remarkSchema } from './remark.ts';
 import { figureSettingsSchema } from './report.ts';

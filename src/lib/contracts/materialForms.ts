@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { AGE_UNITS, TREE_SET_KINDS, type Confirm } from './materials.ts';
-import { measureSchema } from './measure.ts';
+import { measureSchema } from './measureSchema.ts';
 
 /** An empty field of a form arrives as empty text. */
 const answer = <Schema extends z.ZodType>(schema: Schema) =>

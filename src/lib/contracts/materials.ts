@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { measureSchema } from './measure.ts';
+import { measureSchema } from './measureSchema.ts';
 
 export const AGE_UNITS = ['Ma', 'ka', 'relative'] as const;
 export type AgeUnit = (typeof AGE_UNITS)[number];

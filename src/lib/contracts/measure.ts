@@ -1,5 +1,3 @@
-import { z } from 'zod';
-
 export const MEASURES = [
 	'schoener-d',
 	'warren-i',
@@ -11,7 +9,6 @@ export const MEASURES = [
 	'spearman-cells',
 	'other'
 ] as const;
-export const measureSchema = z.enum(MEASURES);
 export type Measure = (typeof MEASURES)[number];
 
 /** The measure as written in a sentence. */
