@@ -6,6 +6,7 @@ import {
 	settleMaterialForm,
 	type MaterialName
 } from '#lib/contracts/materialForms.ts';
+import { confirmSchema } from '#lib/contracts/materials.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
 import { startAnalysis } from '#lib/server/api/startAnalysis.ts';
@@ -73,18 +74,18 @@ export async function settleMaterial({ params, request, locals }: RequestEvent) 
 	redirect(303, pageOf(params.study));
 }
 
+/** The two of a run’s readings that a confirmation can hold on to. */
+const readingSchema = confirmSchema.pick({ kind: true, scale: true }).loose();
+
 /** What the text was read as stays as it is, where it is not asked about. */
 async function settleRun(access: Access, id: string, confirm: ReturnType<typeof confirmOf>): Promise<boolean> {
 	const run = await overlapRuns.findListed(access, id);
 	if (run === null) return false;
 	const isSure = (...codes: string[]) => !run.remarks.some(({ code }) => codes.includes(code));
-	const { kind, scale } = run.reading;
+	const { kind, scale } = readingSchema.parse(run.reading);
 	const read = {
-		...(isSure('similarity-or-distance', 'similarity-assumed', 'negative-overlap') &&
-		(kind === 'similarity' || kind === 'distance')
-			? { kind }
-			: {}),
-		...(isSure('percent-or-fraction') && (scale === 'fraction' || scale === 'percent') ? { scale } : {})
+		...(isSure('similarity-or-distance', 'similarity-assumed', 'negative-overlap') ? { kind } : {}),
+		...(isSure('percent-or-fraction') ? { scale } : {})
 	};
 	return overlapRuns.settle(access, id, { ...read, ...confirm });
 }
@@ -115,9 +116,7 @@ export async function runAgain({ params, request, locals }: RequestEvent) {
 		await overlapRuns.list(access),
 		await overlapRuns.listDeleted(access)
 	];
-	const stale = staleAnalyses(await analyses.list(access), materials.flat()).filter(
-		({ renewed }) => renewed.treeSet === id || renewed.overlapRun === id
-	);
+	const stale = staleAnalyses(await analyses.list(access), materials.flat()).filter(({ through }) => through.includes(id));
 	const refused: string[] = [];
 	for (const one of stale) {
 		const message = await renew(access, one);

@@ -22,7 +22,7 @@ export async function materialsPage(access: Access, { withDeleted }: { withDelet
 	const stale = staleAnalyses(asked, [...trees, ...runs, ...gone]);
 	const uses: Uses = {
 		usedBy: (id) => asked.filter(({ treeSetId, overlapRunId }) => treeSetId === id || overlapRunId === id).length,
-		staleFor: (id) => stale.filter(({ renewed }) => renewed.treeSet === id || renewed.overlapRun === id).length
+		staleFor: (id) => stale.filter(({ through }) => through.includes(id)).length
 	};
 	const printed = await printedFormRemark(access, runs);
 	return {

@@ -20,7 +20,9 @@ describe('staleAnalyses', () => {
 			material('r1', null, GONE),
 			material('r2', 'r1')
 		];
-		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], materials)).toEqual([{ id: 'a', renewed: plan('t3', 'r2') }]);
+		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], materials)).toEqual([
+			{ id: 'a', renewed: plan('t3', 'r2'), through: ['t3', 'r2'] }
+		]);
 	});
 
 	it('leaves out what was run again already, and keeps what was asked with another seed', () => {
@@ -30,7 +32,10 @@ describe('staleAnalyses', () => {
 			{ id: 'new', plan: plan('t2', 'r1') },
 			{ id: 'other', plan: plan('t1', 'r1', 2) }
 		];
-		expect(staleAnalyses(asked, materials).map(({ id }) => id)).toEqual(['other']);
+		const stale = staleAnalyses(asked, materials);
+		expect(stale.map(({ id }) => id)).toEqual(['other']);
+		// Only the tree was replaced; the run it is tested with is not at fault.
+		expect(stale[0]?.through).toEqual(['t2']);
 	});
 
 	it('lists nothing where the new material was deleted too', () => {

@@ -4,7 +4,12 @@ type Material = { readonly id: string; readonly replaces: string | null; readonl
 type Asked = { readonly id: string; readonly plan: Plan };
 
 /** A plan that names a replaced material, and the same plan with what took its place. */
-export type Stale = { readonly id: string; readonly renewed: Plan };
+export type Stale = {
+	readonly id: string;
+	readonly renewed: Plan;
+	/** ids of the materials that took another’s place in it */
+	readonly through: readonly string[];
+};
 
 /**
  * Analyses that ran on a material which another has replaced since, unless the same was run on the new one already. Where
@@ -20,7 +25,10 @@ export function staleAnalyses(asked: readonly Asked[], materials: readonly Mater
 		const renewed = { ...plan, treeSet: lastHeir(heirs, plan.treeSet), overlapRun: lastHeir(heirs, plan.overlapRun) };
 		const isSame = renewed.treeSet === plan.treeSet && renewed.overlapRun === plan.overlapRun;
 		if (isSame || !kept.has(renewed.treeSet) || !kept.has(renewed.overlapRun) || known.has(keyOf(renewed))) return [];
-		return [{ id, renewed }];
+		const through = [renewed.treeSet, renewed.overlapRun].filter(
+			(material) => material !== plan.treeSet && material !== plan.overlapRun
+		);
+		return [{ id, renewed, through }];
 	});
 }
 

@@ -30,6 +30,15 @@ describe('nameThreads', () => {
 		expect(after.species[1]?.standing).toBe('left-out');
 	});
 
+	it('ties a species to each of the tips it could be', () => {
+		const { threads, tips } = threadsOf(['Rana alba KU1', 'Rana alba KU2'], ['Rana alba']);
+		expect(threads.map(({ tip, standing }) => [tip, standing])).toEqual([
+			[0, 'proposed'],
+			[1, 'proposed']
+		]);
+		expect(tips.map(({ standing }) => standing)).toEqual(['proposed', 'proposed']);
+	});
+
 	it('draws one thread to a tip that a decision gave to another species than its namesake', () => {
 		const { threads, species } = threadsOf(
 			['Rana alba', 'Rana nigra'],

@@ -24,7 +24,9 @@ export function nameThreads({ tips, species }: Names, rows: readonly NameRow[]):
 		if (tip !== undefined && !isLost) ofTips[tip] = standing;
 		for (const candidate of row.tip === undefined ? (row.candidates ?? []) : []) {
 			const place = places.tip.get(candidate);
-			if (place !== undefined) ofTips[place] = 'open';
+			if (place === undefined || own === undefined) continue;
+			ofTips[place] = 'proposed';
+			threads.push({ tip: place, species: own, standing: 'proposed' });
 		}
 		if (tip !== undefined && own !== undefined && !isLost) threads.push({ tip, species: own, standing });
 	}
