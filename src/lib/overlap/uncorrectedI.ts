@@ -27,7 +27,7 @@ export function uncorrectedIRemark(iMatrix: PairMatrix, dMatrix?: PairMatrix): R
 	const after = leastOf(iMatrix) < PRINTED_FLOOR - PRINTED_ROUNDING ? broken : brokenBounds(iMatrix, dMatrix, converted);
 	const { count, pairs, worst } = broken;
 	const where = { name: worst.name, otherName: worst.otherName };
-	const found = `${count} of ${pairs} pairs break D ≤ I ≤ √(D(2 − D)), most “${worst.name}” with “${worst.otherName}”: D ${worst.d}, I ${worst.i}.`;
+	const found = `${count} of ${pairs} pairs break D ≤ I ≤ √(D(2 − D)), most “${worst.name}” with “${worst.otherName}”: D ${shown(worst.d)}, I ${shown(worst.i)}.`;
 	if (after.count < count) {
 		const message = `${found} The values of I look like the form printed in 2008, before its correction. Convert them by 1 − 2(1 − I)²?`;
 		return remark('look', 'uncorrected-i', message, where);
@@ -53,6 +53,11 @@ export function correctedI(printed: PairMatrix): PairMatrix {
 		);
 	}
 	return { species: printed.species, values: printed.values.map(converted) };
+}
+
+/** Four digits are enough to find a cell by. */
+function shown(value: number): number {
+	return Number(value.toPrecision(4));
 }
 
 function converted(printed: number): number {

@@ -1,6 +1,6 @@
 import { randomInt } from 'node:crypto';
 import { PLAN_FIELDS, planForm, planValues, type PlanValues } from '#lib/contracts/planForm.ts';
-import { planSchema, SEED_LIMIT, type PlanRequest } from '#lib/contracts/plan.ts';
+import { planSchema, type PlanRequest } from '#lib/contracts/plan.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
@@ -13,6 +13,9 @@ import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { inForce } from './inForce.server.ts';
 import { proposedShuffles } from './planWords.ts';
 import { cladeSpecies } from './cladeSpecies.ts';
+
+/** Short enough to be read out and typed again; any seed of the plan is as good as another. */
+const PROPOSED_SEEDS = 1_000_000;
 
 export type Refused = { readonly code: string; readonly message: string; readonly remarks: readonly Remark[] };
 
@@ -43,7 +46,7 @@ export async function planPage(access: Access, query: URLSearchParams) {
 			alternative: 'less',
 			transform: 'none'
 		},
-		...{ alpha: '0.05', permutations: String(proposedShuffles(run.species.length)), seed: String(randomInt(SEED_LIMIT + 1)) }
+		...{ alpha: '0.05', permutations: String(proposedShuffles(run.species.length)), seed: String(randomInt(PROPOSED_SEEDS)) }
 	};
 	const values = chosenValues(base, query);
 	const before = asked.filter(({ overlapRunId }) => overlapRunId === values.overlapRun);
