@@ -9,6 +9,12 @@ describe('excerpt', () => {
 		expect(lines[2]).toEqual({ number: 3, before: '(a:1,b:', marked: '-', after: '3);', isAtFault: true });
 	});
 
+	it('shows the whole text when its first sign is at fault', () => {
+		expect(excerpt('((a,b);', { line: 1, column: 1 }, 'signs')).toEqual([
+			{ number: 1, before: '', marked: '(', after: '(a,b);', isAtFault: true }
+		]);
+	});
+
 	it('marks the cell a column of a table points to, whatever stands in quotes', () => {
 		const [line] = excerpt('"Parus, major",0.5,oops,1', { line: 1, column: 3 }, 'cells');
 		expect(line).toMatchObject({ before: '"Parus, major",0.5,', marked: 'oops', after: ',1' });

@@ -25,7 +25,7 @@ export function excerpt(text: string, where: Place | undefined, unit: 'signs' | 
 	const first = Math.max(1, line - LINES_AROUND);
 	return linesFrom(text, first, line + LINES_AROUND).map((content, index) => {
 		const number = first + index;
-		if (number !== line) return { number, before: cut(content, 0, 2 * SIGNS_AROUND), marked: '', after: '', isAtFault: false };
+		if (number !== line) return { number, before: clipped(content), marked: '', after: '', isAtFault: false };
 		const [from, to] = column === undefined ? [0, 0] : unit === 'signs' ? [column - 1, column] : cellRange(content, column);
 		return { number, ...around(content, from, to), isAtFault: true };
 	});
@@ -50,16 +50,14 @@ function around(content: string, from: number, to: number) {
 	const end = Math.min(content.length, to + SIGNS_AROUND);
 	return {
 		before: (start > 0 ? '…' : '') + content.slice(start, from),
-		marked: cut(content, from, to),
+		marked: clipped(content.slice(from, to)),
 		after: content.slice(to, end) + (end < content.length ? '…' : '')
 	};
 }
 
-function cut(content: string, from: number, to: number): string {
-	return (
-		content.slice(from, Math.min(to, from + 2 * SIGNS_AROUND)) +
-		(to - from > 2 * SIGNS_AROUND || (from === 0 && content.length > to) ? '…' : '')
-	);
+/** A marked cell may be as long as a text; what is cut away is told by dots. */
+function clipped(marked: string): string {
+	return marked.length > 2 * SIGNS_AROUND ? `${marked.slice(0, 2 * SIGNS_AROUND)}…` : marked;
 }
 
 /** Where a cell stands in its line; quotes hold separators together. */
