@@ -1,4 +1,5 @@
 import type { ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
+import { matrixFromBody, readMatrix } from '#lib/overlap/readMatrix.ts';
 import { analyse } from './analyse.ts';
 import { previewAnalysis } from './previewAnalysis.ts';
 import { pairAges, readTreeFacts, treeStructure } from './readTreeFacts.ts';
@@ -13,6 +14,8 @@ type Handlers = {
 /** What a compute thread can be asked: each task one call. */
 export const computeTasks: Handlers = {
 	readTrees: ({ text, confirm }) => readTreeFacts(text, confirm),
+	readMatrix: ({ measure, confirm, csv, matrix }) =>
+		matrix === undefined ? readMatrix(csv ?? '', { measure, confirm }) : matrixFromBody(matrix, { measure, confirm }),
 	treeStructure: ({ text, tree, spreadConfirmed }) => treeStructure(text, tree, spreadConfirmed),
 	mrcaAges: ({ text, tree, spreadConfirmed, species }) =>
 		pairAges(text, tree, { spreadConfirmed, ...(species ? { species } : {}) }),

@@ -1,7 +1,8 @@
+import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
 import type { Plan } from './plan.ts';
-import type { AgeUnit, Confirm } from './materials.ts';
+import type { AgeUnit, Confirm, OverlapRunRequest } from './materials.ts';
 import type { Measure } from './measure.ts';
 
 /** Everything an analysis runs on. Plain data: it crosses a thread boundary. */
@@ -68,6 +69,8 @@ export type AnalysisPreview = {
 /** Tasks of the compute threads: one entry a task, argument and answer. */
 export type ComputeTasks = {
 	readTrees: { argument: { text: string; confirm?: Confirm }; answer: TreeReading };
+	/** either `csv` or `matrix` */
+	readMatrix: { argument: Pick<OverlapRunRequest, 'measure' | 'confirm' | 'csv' | 'matrix'>; answer: MatrixReading };
 	treeStructure: { argument: { text: string; tree: number; spreadConfirmed: boolean }; answer: TreeStructure };
 	mrcaAges: {
 		argument: { text: string; tree: number; spreadConfirmed: boolean; species?: readonly string[] };

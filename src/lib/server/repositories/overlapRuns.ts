@@ -1,10 +1,10 @@
 import { and, desc, eq, getTableColumns, isNotNull, isNull } from 'drizzle-orm';
 import { matrixSchema, type Confirm, type OverlapRunRequest } from '#lib/contracts/materials.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
-import { matrixFromBody, readMatrix } from '#lib/overlap/readMatrix.ts';
 import { personOf, studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
 import { overlapRuns } from '#lib/server/db/schema.ts';
+import { compute } from '#lib/server/jobs/pool.ts';
 import * as logBook from './logBook.ts';
 import { newId } from './newId.ts';
 import { bytesOf, listedRun, lowerOf, overlapRunFromRow, type ListedRun, type OverlapRun } from './overlapRunRows.ts';
@@ -61,7 +61,7 @@ export async function findKept(access: Access, id: string): Promise<OverlapRun |
 
 /** @throws {InputError} what the reader of matrices refuses */
 export async function create(access: Access, request: OverlapRunRequest): Promise<OverlapRun> {
-	const reading = readRequest(request);
+	const reading = await readRequest(request);
 	const textHash = await texts.store(textOf(request));
 	return keep(access, request, { reading, textHash, replaces: null });
 }
@@ -69,7 +69,7 @@ export async function create(access: Access, request: OverlapRunRequest): Promis
 /** Keeps a new run in the place of an old one, which stays for the analyses that ran on it. */
 export async function replace(access: Access, id: string, request: OverlapRunRequest): Promise<OverlapRun | null> {
 	if ((await find(access, id)) === null) return null;
-	const reading = readRequest(request);
+	const reading = await readRequest(request);
 	const textHash = await texts.store(textOf(request));
 	return transaction(async () => {
 		await change(access, id, { deletedAt: new Date() });
@@ -79,9 +79,8 @@ export async function replace(access: Access, id: string, request: OverlapRunReq
 
 type Given = Pick<OverlapRunRequest, 'measure' | 'confirm' | 'matrix' | 'csv'>;
 
-function readRequest({ measure, confirm, matrix, csv }: Given): MatrixReading {
-	const options = { measure, confirm };
-	return matrix === undefined ? readMatrix(csv ?? '', options) : matrixFromBody(matrix, options);
+function readRequest({ measure, confirm, matrix, csv }: Given): Promise<MatrixReading> {
+	return compute('readMatrix', { measure, confirm, matrix, csv });
 }
 
 /** What arrived is kept as it was: the text, or the matrix as JSON. */
@@ -127,7 +126,7 @@ export async function settle(access: Access, id: string, confirm: Confirm): Prom
 	const { measure } = found;
 	// A matrix that came as JSON has no separator.
 	const given = found.reading['separator'] === null ? { matrix: matrixSchema.parse(JSON.parse(text)) } : { csv: text };
-	const reading = readRequest({ ...given, measure, confirm });
+	const reading = await readRequest({ ...given, measure, confirm });
 	return changeNoted(access, id, { values: readColumns(reading), action: 'overlap-run.changed' });
 }
 

@@ -39,7 +39,11 @@ async function seenIn(upload: Upload, answers: Answers, given: Draft['answers'])
 	try {
 		text = textOf(upload);
 		kind = kindOf(text, answers);
-		return { text, kind, seen: kind === 'trees' ? await lookAtTrees(text, answers, given) : lookAtMatrix(text, answers, given) };
+		return {
+			text,
+			kind,
+			seen: kind === 'trees' ? await lookAtTrees(text, answers, given) : await lookAtMatrix(text, answers, given)
+		};
 	} catch (thrown) {
 		return { text, kind, seen: refusedBy(thrown, text, kind) };
 	}

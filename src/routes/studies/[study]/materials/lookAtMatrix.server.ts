@@ -3,10 +3,10 @@ import { confirmOf, type Answers } from '#lib/contracts/materialForms.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import { overlapSummary } from '#lib/overlap/overlapSummary.ts';
 import type { PairMatrix } from '#lib/overlap/pairMatrix.ts';
-import { readMatrix } from '#lib/overlap/readMatrix.ts';
 import { MATRIX_TEXT_LIMIT_BYTES } from '#lib/server/api/bytes.ts';
 import { refuseLargeText } from '#lib/server/api/readBody.ts';
 import { lowerOf } from '#lib/server/repositories/overlapRunRows.ts';
+import { compute } from '#lib/server/jobs/pool.ts';
 import { tinyWing } from '../tinyWing.ts';
 import type { MatrixSeen, WingSeen } from './draft.ts';
 import { matrixFactWords } from './materialWords.ts';
@@ -19,9 +19,9 @@ type Given = Readonly<Record<string, string>>;
  * @throws {InputError} what the reader of matrices refuses
  * @throws {Refusal} 413 past the limit
  */
-export function lookAtMatrix(text: string, answers: Answers, given: Given): MatrixSeen {
+export async function lookAtMatrix(text: string, answers: Answers, given: Given): Promise<MatrixSeen> {
 	refuseLargeText(text, MATRIX_TEXT_LIMIT_BYTES, 'a matrix text');
-	const reading = readMatrix(text, { measure: answers.measure ?? 'other', confirm: confirmOf(answers) });
+	const reading = await compute('readMatrix', { csv: text, measure: answers.measure ?? 'other', confirm: confirmOf(answers) });
 	const { matrix, remarks } = reading;
 	return {
 		kind: 'matrix',
