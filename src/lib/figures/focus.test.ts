@@ -71,6 +71,11 @@ describe('focusNote', () => {
 		expect(focusNote(model, node(0), 'Ma')).toEqual({ name: 'A–D', facts: '4.00 Ma; 3 pairs across it, mean overlap 0.45' });
 	});
 
+	it('sets the pair count of a node apart from the overlap where there is one pair', () => {
+		// By hand: A and B are 1 Ma old with overlap 0.8, and nothing else meets there.
+		expect(focusNote(model, node(2), 'Ma').facts).toBe('1.00 Ma; one pair across it, overlap 0.80');
+	});
+
 	it('tells the overlap and the ancestor of a pair', () => {
 		expect(focusNote(model, { kind: 'pair', i: 0, j: 1 }, 'Ma')).toEqual({
 			name: 'A and B',

@@ -24,7 +24,7 @@ export function focusNote(model: PlateModel, focus: PlateFocus, unit: AgeUnit): 
 		};
 	}
 	const inner = nodeOf(model, node);
-	const pairs = inner?.pairCount === 1 ? 'one pair across it' : `${grouped(inner?.pairCount ?? 0)} pairs across it, mean`;
+	const pairs = inner?.pairCount === 1 ? 'one pair across it,' : `${grouped(inner?.pairCount ?? 0)} pairs across it, mean`;
 	const ways = (inner?.sides.length ?? 2) > 2 ? `, parts ${inner?.sides.length} ways` : '';
 	const { from, to } = inner ?? { from: 0, to: 1 };
 	return {
