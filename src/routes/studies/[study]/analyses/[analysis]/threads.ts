@@ -60,7 +60,9 @@ function withinSteps({ permutation }: Told): string[] {
 
 function speciesStep({ species, pairs, dropped }: Told): string {
 	const left =
-		dropped.length === 0 ? 'none left out' : `${formatCount(dropped.length)} names left out, each with its reason below`;
+		dropped.length === 0
+			? 'none left out'
+			: `${formatCount(dropped.length)} ${dropped.length === 1 ? 'name' : 'names'} left out, each with its reason below`;
 	return `${formatCount(species)} species that tree and matrix share, ${formatCount(pairs)} pairs; ${left}.`;
 }
 
