@@ -85,10 +85,8 @@ async function thumbnail(access: Access, { id, label, order }: Thumbnail) {
 	return { id, label, wing: run === null ? null : tinyWing(run, order) };
 }
 
-async function analysisLine(
-	access: Access,
-	{ id, status, headline, failure, plan, createdAt, finishedAt, treeSetId }: analyses.ListedAnalysis
-) {
+async function analysisLine(access: Access, listed: analyses.ListedAnalysis) {
+	const { id, status, headline, failure, plan, createdAt, finishedAt, treeSetId } = listed;
 	const tree = await treeSets.findKept(access, treeSetId);
 	return {
 		id,
@@ -97,6 +95,7 @@ async function analysisLine(
 		failure: failure?.message ?? null,
 		floor: 1 / (plan.permutations + 1),
 		ageUnit: tree?.ageUnit ?? 'Ma',
-		at: finishedAt ?? createdAt
+		at: finishedAt ?? createdAt,
+		isOutOfDate: status === 'finished' && (await analyses.outOfDate(access, listed)).length > 0
 	};
 }
