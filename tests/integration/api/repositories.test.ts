@@ -77,6 +77,16 @@ describe('materials', () => {
 		}
 	});
 
+	it('are copied with all that was read, under a label of their own', async () => {
+		const { access, treeSet, run } = await withMaterials();
+		const copiedTrees = await treeSets.copy(access, treeSet.id);
+		const copiedRun = await overlapRuns.copy(access, run.id);
+		expect(copiedTrees).toMatchObject({ label: 'Tree (copy)', textHash: treeSet.textHash, tipCount: treeSet.tipCount });
+		expect(copiedRun).toMatchObject({ label: 'Overlap (copy)', lower: run.lower, species: run.species });
+		expect(await treeSets.list(access)).toHaveLength(2);
+		expect(await overlapRuns.copy(access, 'nothing')).toBeNull();
+	});
+
 	it('of another study are out of reach', async () => {
 		const { treeSet, run } = await withMaterials();
 		const elsewhere = await newStudy();

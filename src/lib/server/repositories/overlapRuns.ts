@@ -134,6 +134,24 @@ export async function rename(access: Access, id: string, label: string): Promise
 	return changeNoted(access, id, { values: { label }, action: 'overlap-run.changed' });
 }
 
+/** A second one of the same text and readings, with a label of its own; null when it is not there. */
+export function copy(access: Access, id: string): Promise<OverlapRun | null> {
+	return transaction(async (tx) => {
+		const [source] = await tx
+			.select()
+			.from(overlapRuns)
+			.where(and(eq(overlapRuns.id, id), isNull(overlapRuns.deletedAt), within(access, overlapRuns.studyId)));
+		if (source === undefined) return null;
+		const { createdAt: _madeThen, ...kept } = source;
+		const row = { ...kept, id: newId(), label: `${source.label} (copy)`, replaces: null, createdBy: personOf(access) };
+		const [copied] = await tx.insert(overlapRuns).values(row).returning();
+		if (copied === undefined) throw new Error('Expected the copy back from the database; got nothing.');
+		await studies.touch(access);
+		await logBook.append(access, { action: 'overlap-run.added', detail: { overlapRun: row.id, label: row.label, copyOf: id } });
+		return overlapRunFromRow(copied);
+	});
+}
+
 export async function remove(access: Access, id: string): Promise<boolean> {
 	return changeNoted(access, id, { values: { deletedAt: new Date() }, action: 'overlap-run.deleted' });
 }

@@ -90,6 +90,24 @@ export async function rename(access: Access, id: string, label: string): Promise
 	return changeNoted(access, id, { values: { label }, action: 'tree-set.changed' });
 }
 
+/** A second one of the same text and readings, with a label of its own; null when it is not there. */
+export function copy(access: Access, id: string): Promise<TreeSet | null> {
+	return transaction(async (tx) => {
+		const [source] = await tx
+			.select()
+			.from(treeSets)
+			.where(and(eq(treeSets.id, id), isNull(treeSets.deletedAt), within(access, treeSets.studyId)));
+		if (source === undefined) return null;
+		const { createdAt: _madeThen, ...kept } = source;
+		const row = { ...kept, id: newId(), label: `${source.label} (copy)`, replaces: null, createdBy: personOf(access) };
+		const [copied] = await tx.insert(treeSets).values(row).returning();
+		if (copied === undefined) throw new Error('Expected the copy back from the database; got nothing.');
+		await studies.touch(access);
+		await logBook.append(access, { action: 'tree-set.added', detail: { treeSet: row.id, label: row.label, copyOf: id } });
+		return treeSetFromRow(copied);
+	});
+}
+
 export async function remove(access: Access, id: string): Promise<boolean> {
 	return changeNoted(access, id, { values: { deletedAt: new Date() }, action: 'tree-set.deleted' });
 }
