@@ -35,6 +35,16 @@ export async function renameMaterial({ params, request, locals }: RequestEvent) 
 	redirect(303, pageOf(params.study));
 }
 
+/** A second one to settle or correct otherwise; the first stays as it is for what rests on it. */
+export async function copyMaterial({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'create', { study: params.study });
+	const form = await parseForm(request, materialForm);
+	if (!form.ok) error(404, NOT_FOUND);
+	const copied = await repositoryOf(form.value.material).copy(access, form.value.material.id);
+	if (copied === null) error(404, NOT_FOUND);
+	redirect(303, pageOf(params.study, `?kept=${copied.id}`));
+}
+
 export async function removeMaterial({ params, request, locals }: RequestEvent) {
 	const access = await can(locals.user, 'delete', { study: params.study });
 	const form = await parseForm(request, materialForm);
