@@ -40,6 +40,16 @@ describe('Plate', () => {
 		expect(note()).toContain('B and C');
 	});
 
+	it('is drawn wide on paper however narrow the screen, and as before afterwards', async () => {
+		render(Plate, { props: { result: microPlate(), initialWidth: 360 } });
+		const width = () => screen.getByRole('img').getAttribute('viewBox')?.split(' ')[2];
+		expect(width()).toBe('360');
+		await fireEvent(window, new Event('beforeprint'));
+		expect(width()).toBe('880'); // the least width on paper; below 552 it would be stacked
+		await fireEvent(window, new Event('afterprint'));
+		expect(width()).toBe('360');
+	});
+
 	it('pins by Enter, compares a second, and frees both by Escape', async () => {
 		const { tree, note, onpin } = plate();
 		await fireEvent.keyDown(tree, { key: 'Home' });
