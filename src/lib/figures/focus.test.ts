@@ -68,7 +68,17 @@ describe('lightsPair', () => {
 
 describe('focusNote', () => {
 	it('tells span, age, pairs and mean of a node', () => {
-		expect(focusNote(model, node(0), 'Ma')).toEqual({ name: 'A–D', facts: '4.00 Ma; 3 pairs across it, mean overlap 0.45' });
+		// By hand: D meets C with weight 1/2, A and B with 1/4 each; the worked example has 9/20.
+		expect(focusNote(model, node(0), 'Ma')).toEqual({
+			name: 'A–D',
+			facts: '4.00 Ma; 3 pairs across it, mean overlap 0.45 (weighted by branching)'
+		});
+	});
+
+	it('calls no mean weighted in which all pairs count alike', () => {
+		// By hand: D meets A, B and C with 0.4, 0.4 and 0.5, a third each: 13/30.
+		const plain = plateModel(microPlate(), 'plain');
+		expect(focusNote(plain, node(0), 'Ma').facts).toBe('4.00 Ma; 3 pairs across it, mean overlap 0.43');
 	});
 
 	it('sets the pair count of a node apart from the overlap where there is one pair', () => {

@@ -26,10 +26,11 @@ export function focusNote(model: PlateModel, focus: PlateFocus, unit: AgeUnit): 
 	const inner = nodeOf(model, node);
 	const pairs = inner?.pairCount === 1 ? 'one pair across it,' : `${grouped(inner?.pairCount ?? 0)} pairs across it, mean`;
 	const ways = (inner?.sides.length ?? 2) > 2 ? `, parts ${inner?.sides.length} ways` : '';
+	const weighted = model.average === 'nested' && inner !== undefined && inner.pairCount > 1 ? ' (weighted by branching)' : '';
 	const { from, to } = inner ?? { from: 0, to: 1 };
 	return {
 		name: spanName(model.species, from, to - 1),
-		facts: `${ageOf(node)}${ways}; ${pairs} overlap ${overlapText(inner?.mean ?? 0)}`
+		facts: `${ageOf(node)}${ways}; ${pairs} overlap ${overlapText(inner?.mean ?? 0)}${weighted}`
 	};
 }
 

@@ -42,6 +42,8 @@ export type PlateModel = {
 	readonly parent: readonly number[];
 	readonly age: readonly number[];
 	readonly rootAge: number;
+	/** how the overlaps across a node are averaged */
+	readonly average: NodeAverage;
 	/** shape (nodes,); rows under every node; a tip has one */
 	readonly rows: readonly RowRange[];
 	/** internal nodes in preorder */
@@ -101,7 +103,7 @@ export function plateModel(input: PlateInput, average: NodeAverage = 'nested'): 
 		const own = { node, age: tree.age[node] ?? 0, parent: tree.parent[node] ?? -1 };
 		nodes.push({ ...own, ...rowRange(rows, node), daughters: below, sides, pairCount, mean });
 	}
-	return { species, parent: tree.parent, age: tree.age, rootAge: tree.age[0] ?? 0, rows, nodes, overlap, ancestor };
+	return { species, parent: tree.parent, age: tree.age, rootAge: tree.age[0] ?? 0, average, rows, nodes, overlap, ancestor };
 }
 
 /** Weighted mean over all pairs of sides, each pair of sides counting alike in a nested mean. */

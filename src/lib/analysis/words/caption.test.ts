@@ -6,6 +6,7 @@ describe('writeCaption', () => {
 	it('names every panel and the numbers a reader judges by', () => {
 		const caption = writeCaption(microResult());
 		for (const panel of ['(a)', '(b)', '(c)', '(d)', '(e)']) expect(caption).toContain(panel);
+		expect(caption).toContain('diamonds, means across a node (weighted by branching);'); // what the plate draws unless asked
 		// By hand from the worked example: slope −31/265, two of 24 relabellings, two of six within the deepest split.
 		expect(caption).toContain('Slope −0.117 per Myr, r = −0.95; p = 0.083 (one-sided, falls; all 24 relabellings).');
 		expect(caption).toContain('Within the deepest split p = 0.33.');

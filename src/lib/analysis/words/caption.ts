@@ -16,7 +16,7 @@ function panels(result: AnalysisResult): string {
 		`(a) ${measure} of every pair, folded against the names.`,
 		`(b) Dated tree; ${age}.`,
 		'(c) All overlaps; its colours are the key to a and d.',
-		`(d) Overlap against age of the most recent common ancestor, one column of pairs under each node (strips: width by the square root of the number of pairs); diamonds, means across a node;`,
+		`(d) Overlap against age of the most recent common ancestor, one column of pairs under each node (strips: width by the square root of the number of pairs); diamonds, means across a node (weighted by branching);`,
 		'coloured line, all pairs; dashed, node means; grey lines, all pairs after shuffling the species among the tips.',
 		'(e) Where the shuffled lines end at the root, and where the observed line does.'
 	].join(' ');
