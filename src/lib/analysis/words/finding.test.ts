@@ -136,6 +136,8 @@ describe('findFinding', () => {
 		expect(findFinding(exact).sentence).toContain(
 			'12 of all 40,320 relabellings of the species fell as steeply, the one observed included (p = 0.00030).'
 		);
+		// Only the count is a number to be traced; a longer stretch could not wrap on a phone.
+		expect(findFinding(exact).parts.find(({ key }) => key === 'shuffles')?.text).toBe('12 of all 40,320');
 	});
 
 	it('defers to local regulations and licensed practice in every finding', () => {

@@ -31,10 +31,10 @@ function shuffleSentence(facts: FindingFacts): SentencePart[] {
 	const { permutation } = facts;
 	const verb = STATISTIC_WORDS[permutation.statistic].asExtreme[facts.alternative];
 	if (permutation.exact) {
-		const count = `${formatCount(permutation.asExtreme)} of all ${formatCount(permutation.count)} relabellings of the species`;
+		const count = `${formatCount(permutation.asExtreme)} of all ${formatCount(permutation.count)}`;
 		return [
 			{ text: count, key: 'shuffles' },
-			{ text: ` ${verb}, the one observed included (` },
+			{ text: ` relabellings of the species ${verb}, the one observed included (` },
 			{ text: `p ${formatP(permutation.p, null)}`, key: 'p' },
 			{ text: '). ' }
 		];
