@@ -1,4 +1,5 @@
 import { formatCount } from '#lib/analysis/words/numbers.ts';
+import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import { MEASURE_NAMES, type Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import { STATISTIC_CHOICES, treeWords, wordsOf } from '../planWords.ts';
@@ -22,14 +23,24 @@ export function comparedFacts({ tree, run }: Materials, { tree: index, species }
 	];
 }
 
-/** How it was asked, for the margin. */
-export function planFacts(plan: Plan): Fact[] {
+type Tested = Pick<AnalysisResult['permutation'], 'exact' | 'count'>;
+
+/** How it was asked, for the margin; with `tested`, what was done where every relabelling could be counted. */
+export function planFacts(plan: Plan, tested: Tested | null = null): Fact[] {
 	return [
 		{ term: 'Question', fact: QUESTIONS[plan.alternative] },
 		{ term: 'Judged by', fact: wordsOf(STATISTIC_CHOICES, plan.statistic).replace(/^the /, '') },
 		...(plan.transform === 'logit' ? [{ term: 'Scale', fact: 'logit' }] : []),
 		{ term: 'Level', fact: String(plan.alpha) },
-		{ term: 'Shuffles', fact: formatCount(plan.permutations) },
-		{ term: 'Seed', fact: String(plan.seed) }
+		...shuffleFacts(plan, tested)
+	];
+}
+
+function shuffleFacts({ permutations, seed }: Plan, tested: Tested | null): Fact[] {
+	const asked = formatCount(permutations);
+	if (tested?.exact) return [{ term: 'Shuffles', fact: `all ${formatCount(tested.count)} relabellings (${asked} asked for)` }];
+	return [
+		{ term: 'Shuffles', fact: asked },
+		{ term: 'Seed', fact: String(seed) }
 	];
 }

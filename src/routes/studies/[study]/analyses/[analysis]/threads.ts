@@ -19,7 +19,7 @@ export function thread(key: ThreadKey, told: Told, sources: Sources): string[] {
 	const steps: Record<ThreadKey, () => string[]> = {
 		slope: () => [slopeStep(told), ...materialSteps(told, sources)],
 		p: () => [pStep(told), shuffleStep(told), slopeStep(told)],
-		shuffles: () => [shuffleStep(told), `Seed ${told.engine.seed}, engine ${told.engine.version}.`],
+		shuffles: () => [shuffleStep(told), engineStep(told)],
 		within: () => withinSteps(told),
 		species: () => [speciesStep(told), ...materialSteps(told, sources)]
 	};
@@ -46,6 +46,10 @@ function shuffleStep({ permutation, compared, engine }: Told): string {
 		? `all ${formatCount(permutation.count)} relabellings`
 		: `${formatCount(permutation.count)} shuffles drawn from seed ${engine.seed}`;
 	return `${formatCount(permutation.asExtreme)} of ${all} ${verb}, ties included.`;
+}
+
+function engineStep({ permutation, engine }: Told): string {
+	return permutation.exact ? `Engine ${engine.version}.` : `Seed ${engine.seed}, engine ${engine.version}.`;
 }
 
 function withinSteps({ permutation }: Told): string[] {

@@ -25,7 +25,7 @@ export async function reportPage(access: Access, report: Report) {
 		found: {
 			...resultWords(analysis.result),
 			...{ decisions, hash, declaredAt, finishedAt },
-			facts: [...comparedFacts({ tree, run }, plan), ...planFacts(plan)],
+			facts: [...comparedFacts({ tree, run }, plan), ...planFacts(plan, analysis.result.permutation)],
 			materials: [
 				{ what: 'Tree', label: tree.label, textHash: tree.textHash },
 				{ what: 'Overlaps', label: run.label, textHash: run.textHash }
@@ -36,6 +36,6 @@ export async function reportPage(access: Access, report: Report) {
 }
 
 function resultWords(result: AnalysisResult) {
-	const { finding, dropped, engine } = result;
-	return { finding, dropped, engine, figures: fourFigures(result), groups: testFacts(result) };
+	const { finding, dropped, engine, permutation } = result;
+	return { finding, dropped, engine, isExact: permutation.exact, figures: fourFigures(result), groups: testFacts(result) };
 }
