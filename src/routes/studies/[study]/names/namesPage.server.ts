@@ -7,6 +7,7 @@ import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { drawTreeSet } from '../materials/drawTree.server.ts';
 import { openNames } from './openNames.ts';
 import { nameThreads } from './threads.ts';
+import { speciesUse, usedWords } from './usedWords.ts';
 
 /** More lines than this cannot be followed by eye; the lists stand without threads. */
 const THREADS_UP_TO = 600;
@@ -30,7 +31,7 @@ export async function namesPage(access: Access, { tree, run }: { tree: string | 
 			settled: matching.rows
 				.filter(({ settled }) => settled)
 				.map((row) => settledLine(row, isVisitor ? undefined : decided.get(row.species ?? row.tip ?? ''))),
-			...{ tips: treeSet.tips, species: overlapRun.species, leftOut: leftOutCount(matching) },
+			...{ tips: treeSet.tips, species: overlapRun.species, used: usedWords(speciesUse(matching)) },
 			figure: treeSet.tips.length > THREADS_UP_TO ? null : await figureOf(treeSet, overlapRun.species, matching)
 		}
 	};
@@ -40,10 +41,6 @@ const choice = ({ id, label }: { id: string; label: string }) => ({ id, label })
 
 async function figureOf(treeSet: TreeSet, species: readonly string[], { rows }: NameMatching) {
 	return { ...nameThreads({ tips: treeSet.tips, species }, rows), drawing: await drawTreeSet(treeSet) };
-}
-
-function leftOutCount({ dropped }: NameMatching): number {
-	return dropped.filter((name) => name.in === 'data').length;
 }
 
 function settledLine({ species, tip, kind, reason, decision }: NameRow, held: names.CurrentDecision | undefined) {
