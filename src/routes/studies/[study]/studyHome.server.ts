@@ -11,6 +11,7 @@ import * as texts from '#lib/server/repositories/texts.ts';
 import { treeInText, type TreeSet } from '#lib/server/repositories/treeSetRows.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { questionParts } from './questionParts.ts';
+import { restsOnOld } from './reports/restsOnOld.server.ts';
 import { tinyTree } from './tinyTree.ts';
 import { tinyWing } from './tinyWing.ts';
 
@@ -35,7 +36,7 @@ export async function studyHome(access: Access, study: string) {
 		moreRuns: Math.max(0, runs.length - WINGS_SHOWN),
 		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
 		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
-		reports: saved.slice(0, LINES_SHOWN).map(({ id, title, author, changedAt }) => ({ id, title, author, changedAt }))
+		reports: await Promise.all(saved.slice(0, LINES_SHOWN).map((report) => reportLine(access, report, asked)))
 	};
 }
 
@@ -98,4 +99,9 @@ async function analysisLine(access: Access, listed: analyses.ListedAnalysis) {
 		at: finishedAt ?? createdAt,
 		isOutOfDate: status === 'finished' && (await analyses.outOfDate(access, listed)).length > 0
 	};
+}
+
+async function reportLine(access: Access, report: reports.Report, asked: readonly analyses.ListedAnalysis[]) {
+	const { id, title, author, changedAt } = report;
+	return { id, title, author, changedAt, isOutOfDate: await restsOnOld(access, report, asked) };
 }

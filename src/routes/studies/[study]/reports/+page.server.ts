@@ -1,8 +1,10 @@
 import { fail, redirect } from '@sveltejs/kit';
+import type { Access } from '#lib/server/access.ts';
 import { can } from '#lib/server/permissions.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
 import type { Actions, PageServerLoad } from './$types';
+import { restsOnOld } from './restsOnOld.server.ts';
 
 export const load: PageServerLoad = async ({ params, locals, url, parent }) => {
 	const access = await can(locals.user, 'read', { study: params.study });
@@ -10,15 +12,18 @@ export const load: PageServerLoad = async ({ params, locals, url, parent }) => {
 	const asked = await analyses.list(access);
 	const deleted = study.may.lead ? await reports.listDeleted(access) : [];
 	return {
-		reports: (await reports.list(access)).map(({ id, title, author, changedAt, analysisId }) => ({
-			...{ id, title, author, changedAt },
-			finding: asked.find((analysis) => analysis.id === analysisId)?.headline?.title ?? null
-		})),
+		reports: await Promise.all((await reports.list(access)).map((report) => reportLine(access, report, asked))),
 		newestFinished: asked.find(({ status }) => status === 'finished')?.id ?? null,
 		deleted: deleted.map(({ id, title, changedAt }) => ({ id, title, changedAt })),
 		justDeleted: deleted.find(({ id }) => id === url.searchParams.get('deleted'))?.id ?? null
 	};
 };
+
+async function reportLine(access: Access, report: reports.Report, asked: readonly analyses.ListedAnalysis[]) {
+	const { id, title, author, changedAt, analysisId } = report;
+	const finding = asked.find((analysis) => analysis.id === analysisId)?.headline?.title ?? null;
+	return { id, title, author, changedAt, finding, isOutOfDate: await restsOnOld(access, report, asked) };
+}
 
 export const actions: Actions = {
 	restore: async ({ params, request, locals }) => {
