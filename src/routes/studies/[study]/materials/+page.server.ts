@@ -11,6 +11,7 @@ import {
 	settleMaterial
 } from './careActions.server.ts';
 import { keep, lookAt } from './intake.server.ts';
+import { keptBeside } from './keptBeside.server.ts';
 import { materialsPage, replacing } from './materialsPage.server.ts';
 import { readUpload } from './readUpload.server.ts';
 import { uploadRefusal } from './uploadRefusal.server.ts';
@@ -32,10 +33,10 @@ const holdsText = ({ request }: RequestEvent) => request.headers.get('x-svelteki
 
 export const actions: Actions = {
 	look: async (event) => {
-		await can(event.locals.user, 'create', { study: event.params.study });
+		const access = await can(event.locals.user, 'create', { study: event.params.study });
 		const upload = await readUpload(event.request).catch(uploadRefusal);
 		if ('message' in upload) return fail(413, { message: upload.message });
-		const draft = await lookAt(upload);
+		const draft = await lookAt(upload, await keptBeside(access, replacedBy(event.url)));
 		return { draft: holdsText(event) ? { ...draft, text: '' } : draft };
 	},
 	keep: async (event) => {

@@ -8,26 +8,26 @@ import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { z } from 'zod';
 import type { Draft, Refused } from './draft.ts';
 import { excerpt } from './excerpt.ts';
-import { guessMeasure } from './guessMeasure.ts';
+import { keptBeside, type KeptBeside } from './keptBeside.server.ts';
+import { kindOfText } from './kindOfText.ts';
 import { lookAtMatrix, overlapRunRequest } from './lookAtMatrix.server.ts';
 import { lookAtTrees, treeSetRequest } from './lookAtTrees.server.ts';
-import { proposeLabel } from './proposeLabel.ts';
+import { labelOf } from './proposeLabel.ts';
 import { textOf, type Upload } from './readUpload.server.ts';
-import { recogniseText } from './recogniseText.ts';
+import { withGuesses } from './withGuesses.ts';
 
 type Kind = 'trees' | 'matrix';
 
 /** A text as the program understands it; what cannot be read is told in the draft, with the text. */
-export async function lookAt(upload: Upload): Promise<Draft> {
-	const given = withGuesses(upload);
+export async function lookAt(upload: Upload, beside: KeptBeside): Promise<Draft> {
+	const given = withGuesses(upload, beside.former);
 	const parsed = answersForm.safeParse(given);
 	const faults = parsed.success ? {} : faultsOf(parsed.error);
 	const answers = parsed.success ? parsed.data : answersForm.parse({ readAs: given['readAs'] ?? '' });
 	const { text, kind, seen } = await seenIn(upload, answers, given);
-	const typed = given['label'] ?? '';
-	// A name nobody has touched follows what is learnt about the text.
-	const isUntouched = typed === '' || typed === proposeLabel(upload.name, kind, undefined);
-	const label = isUntouched ? proposeLabel(upload.name, kind, given['measure']) : typed;
+	const { former, taken } = beside;
+	const ground = { fileName: upload.name, kind, measure: given['measure'], former: former?.label };
+	const label = labelOf(given['label'] ?? '', { ...ground, taken: kind === null ? [] : taken[kind] });
 	return { name: upload.name, text, label, answers: given, seen, faults };
 }
 
@@ -38,7 +38,7 @@ async function seenIn(upload: Upload, answers: Answers, given: Draft['answers'])
 	let kind: Kind | null = null;
 	try {
 		text = textOf(upload);
-		kind = kindOf(text, answers);
+		kind = answers.readAs ?? kindOfText(text);
 		return {
 			text,
 			kind,
@@ -47,22 +47,6 @@ async function seenIn(upload: Upload, answers: Answers, given: Draft['answers'])
 	} catch (thrown) {
 		return { text, kind, seen: refusedBy(thrown, text, kind) };
 	}
-}
-
-function kindOf(text: string, { readAs }: Answers): Kind {
-	if (readAs !== undefined) return readAs;
-	const recognised = recogniseText(text);
-	if (recognised !== 'rich-text') return recognised;
-	throw new InputError(
-		'rich-text',
-		'Expected plain text; this is a word processor’s file. Open it, choose Save as, and save it as plain text.'
-	);
-}
-
-function withGuesses({ name, fields }: Upload): Record<string, string> {
-	const { measure, ...rest } = fields;
-	const chosen = measure ?? guessMeasure(name) ?? '';
-	return { ...rest, measure: chosen };
 }
 
 function refusedBy(thrown: unknown, text: string, kind: Kind | null): Refused {
@@ -84,8 +68,10 @@ export type Kept =
 
 /** Keeps a text that was looked at, in the place of another material where one is named; refused, it comes back as a draft. */
 export async function keep(access: Access, upload: Upload, replaces: { kind: Kind; id: string } | null): Promise<Kept> {
-	const draft = await lookAt(upload);
-	const parsed = keepForm.safeParse({ ...draft.answers, label: draft.answers['label'] ?? '' });
+	const draft = await lookAt(upload, await keptBeside(access, replaces));
+	const typed = (draft.answers['label'] ?? '').trim();
+	// An emptied name is asked for; a proposal that was taken since it was made is numbered.
+	const parsed = keepForm.safeParse({ ...draft.answers, label: typed === '' ? '' : draft.label });
 	if (!parsed.success)
 		return { ok: false, draft: { ...draft, label: upload.fields['label'] ?? '', faults: faultsOf(parsed.error) } };
 	const { kind } = draft.seen;

@@ -22,6 +22,16 @@ describe('recogniseText', () => {
 		expect(recogniseText(text)).toBe('matrix');
 	});
 
+	it('tells words without any number', () => {
+		expect(recogniseText('We measured the overlap of four frogs, in spring; see below.')).toBe('words');
+		expect(recogniseText('species,a,b\na,NA,NA')).toBe('words');
+	});
+
+	it('finds the numbers of a table whose names alone fill its beginning', () => {
+		const names = Array.from({ length: 900 }, () => 'Rana alba').join();
+		expect(recogniseText(`species,${names}\nRana alba,1`)).toBe('matrix');
+	});
+
 	it('tells a word processor’s file', () => {
 		expect(recogniseText('{\\rtf1\\ansi (a:1,b:1);}')).toBe('rich-text');
 	});

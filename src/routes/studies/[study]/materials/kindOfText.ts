@@ -1,0 +1,23 @@
+import { InputError } from '#lib/remarks/inputError.ts';
+import { recogniseText } from './recogniseText.ts';
+
+/**
+ * Whether a text is read as trees or as a matrix.
+ * @throws {InputError} `rich-text` on a word processor's file, `no-material` on words without any number
+ */
+export function kindOfText(text: string): 'trees' | 'matrix' {
+	const recognised = recogniseText(text);
+	if (recognised === 'rich-text') {
+		throw new InputError(
+			'rich-text',
+			'Expected plain text; this is a word processor’s file. Open it, choose Save as, and save it as plain text.'
+		);
+	}
+	if (recognised === 'words') {
+		throw new InputError(
+			'no-material',
+			'Expected a tree or a table of numbers; this text is neither. A tree would begin with a bracket or #NEXUS, and a table would hold numbers; there is none here.'
+		);
+	}
+	return recognised;
+}
