@@ -3,6 +3,7 @@ import { materialSchema } from '#lib/contracts/materialForms.ts';
 import { can } from '#lib/server/permissions.ts';
 import type { Actions, PageServerLoad, RequestEvent } from './$types';
 import {
+	copyMaterial,
 	correctMaterial,
 	removeMaterial,
 	renameMaterial,
@@ -50,6 +51,7 @@ export const actions: Actions = {
 		redirect(303, `/studies/${params.study}/materials?kept=${kept.id}`);
 	},
 	rename: renameMaterial,
+	copy: copyMaterial,
 	remove: removeMaterial,
 	restore: restoreMaterial,
 	settle: settleMaterial,
