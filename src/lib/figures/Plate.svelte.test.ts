@@ -45,7 +45,7 @@ describe('Plate', () => {
 		const width = () => screen.getByRole('img').getAttribute('viewBox')?.split(' ')[2];
 		expect(width()).toBe('360');
 		await fireEvent(window, new Event('beforeprint'));
-		expect(width()).toBe('880'); // the least width on paper; below 552 it would be stacked
+		expect(width()).toBe('920'); // the least width on paper; below 552 it would be stacked
 		await fireEvent(window, new Event('afterprint'));
 		expect(width()).toBe('360');
 	});
