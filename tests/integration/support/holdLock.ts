@@ -3,9 +3,10 @@ import { LockedError, takeLock } from '#lib/server/lock.ts';
 
 try {
 	takeLock(process.argv[2] ?? '', process.argv[3] ?? 'a child');
-	process.stdout.write('holding\n');
 	setInterval(() => undefined, 1000);
+	// Before the word that the test waits for, else its signal may come first and end the process unheard.
 	process.on('SIGTERM', () => process.exit(0));
+	process.stdout.write('holding\n');
 } catch (thrown) {
 	if (!(thrown instanceof LockedError)) throw thrown;
 	process.stderr.write(`${thrown.message}\n`);
