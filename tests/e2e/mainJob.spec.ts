@@ -1,3 +1,4 @@
+import AxeBuilder from '@axe-core/playwright';
 import { mkdirSync } from 'node:fs';
 import { execFileSync } from 'node:child_process';
 import { expect, test, type Page } from '@playwright/test';
@@ -88,6 +89,8 @@ test('a new person gets from two texts to slope, p and a report', async ({ page 
 	await page.getByRole('button', { name: /save/i }).click();
 	await page.waitForURL(/\/reports\/(?!new)[^/?]+/);
 	await expect(page.getByRole('heading', { level: 1 })).toContainText('Dune meadow plants');
+	const { violations } = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21aa', 'wcag22aa']).analyze();
+	expect(violations.map(({ id, nodes }) => `${id}: ${nodes[0]?.html ?? ''}`)).toEqual([]);
 
 	mkdirSync(info.outputDir, { recursive: true });
 	const pdf = info.outputPath('report.pdf');
