@@ -1,8 +1,20 @@
 /** The state of one stream: the words a, b, c and the counter of sfc32. Drawing changes it. */
 export type RandomStream = { readonly words: Int32Array };
 
-/** What a stream is for, so that two questions asked with one seed never share their numbers. */
-export const STREAM_DOMAIN = { free: 0, within: 1 } as const;
+/**
+ * What a stream is for, so that two questions asked with one seed never share their numbers. Every statistic of the free
+ * question reads the same shuffles, which is what lets a minimum p compare them. Shuffles inside one clade take
+ * `insideClade` plus the clade's node.
+ */
+export const STREAM_DOMAIN = {
+	free: 0,
+	within: 1,
+	power: 2,
+	fallBootstrap: 3,
+	fallShape: 4,
+	signal: 5,
+	insideClade: 0x1_0000
+} as const;
 
 /** Rounds thrown away after seeding, as the generator's author does for three seed words. */
 const WARM_UP_ROUNDS = 15;
@@ -42,6 +54,26 @@ export function nextUint32({ words }: RandomStream): number {
 }
 
 const TWO_TO_32 = 4_294_967_296;
+
+/** A number uniform on the open interval (0, 1): the middles of 2^32 equal steps. */
+export function nextUniform(stream: RandomStream): number {
+	return (nextUint32(stream) + 0.5) / TWO_TO_32;
+}
+
+/**
+ * A standard normal number: the first of the pair that the polar method makes, the second thrown away so that a stream
+ * holds no hidden state.
+ *
+ * @see Marsaglia & Bray (1964), doi:10.1137/1006063
+ */
+export function nextNormal(stream: RandomStream): number {
+	for (;;) {
+		const x = 2 * nextUniform(stream) - 1;
+		const y = 2 * nextUniform(stream) - 1;
+		const square = x * x + y * y;
+		if (square > 0 && square < 1) return x * Math.sqrt((-2 * Math.log(square)) / square);
+	}
+}
 
 /**
  * A uniform whole number below `bound`, without bias: the high word of the product, redrawn in the few cases whose low
