@@ -32,6 +32,7 @@ const WORDS: Readonly<Record<LoggedAction, string>> = {
 	'overlap-run.replaced': 'replaced an older overlap run by',
 	'overlap-run.deleted': 'deleted an overlap run',
 	'overlap-run.restored': 'brought back an overlap run',
+	'overlap-run.opened': 'first saw the values of the overlap run',
 	'name.decided': 'decided about names',
 	'name.withdrawn': 'withdrew decisions about names',
 	'analysis.declared': 'declared the plan of an analysis',

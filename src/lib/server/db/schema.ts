@@ -16,6 +16,7 @@ import {
 import type { AnalysisProgress, AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
+import type { PlanContext } from '#lib/contracts/planContext.ts';
 import type { FigureSettings } from '#lib/contracts/report.ts';
 import type { Role } from '#lib/contracts/user.ts';
 import type { AgeUnit, AnalysisStatus, TreeSetKind } from '#lib/contracts/materials.ts';
@@ -227,6 +228,8 @@ export const analyses = pgTable(
 		/** the sentence a failed or refused run leaves */
 		failure: jsonb('failure').$type<{ code: string; message: string; reference?: string }>(),
 		declaredAt: timestamp('declared_at', { withTimezone: true }),
+		/** what had been seen of the matrix when the plan was written down; null for plans of before this was kept */
+		context: jsonb('context').$type<PlanContext>(),
 		createdBy: text('created_by')
 			.notNull()
 			.references(() => users.id),

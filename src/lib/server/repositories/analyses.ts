@@ -9,6 +9,7 @@ import { analysisFromRow, listedAnalysis, listedColumns } from './analysisRows.t
 import type { Analysis, AnalysisFailure, ListedAnalysis, UsedDecision } from './analysisRows.ts';
 import * as logBook from './logBook.ts';
 import { newId } from './newId.ts';
+import * as openings from './openings.ts';
 import { within } from './scope.ts';
 import * as studies from './studies.ts';
 
@@ -71,9 +72,10 @@ export function create(access: Access, { plan, hash, decisions }: NewAnalysis): 
 	const owner = { studyId: studyOf(access), createdBy: personOf(access) };
 	const materials = { treeSetId: plan.treeSet, overlapRunId: plan.overlapRun };
 	return transaction(async (tx) => {
+		const context = await openings.contextOf(access, plan.overlapRun);
 		const added = await tx
 			.insert(analyses)
-			.values({ id, ...owner, ...materials, plan, hash, decisions: [...decisions], status: 'waiting' })
+			.values({ id, ...owner, ...materials, plan, context, hash, decisions: [...decisions], status: 'waiting' })
 			.onConflictDoNothing()
 			.returning({ id: analyses.id });
 		if (added.length === 0) return again(access, hash);
@@ -93,9 +95,10 @@ export function declare(access: Access, { plan, hash, decisions }: NewAnalysis):
 	const materials = { treeSetId: plan.treeSet, overlapRunId: plan.overlapRun };
 	const written = { plan, hash, decisions: [...decisions], declaredAt: new Date() };
 	return transaction(async (tx) => {
+		const context = await openings.contextOf(access, plan.overlapRun);
 		const added = await tx
 			.insert(analyses)
-			.values({ id, ...owner, ...materials, ...written, status: 'stopped' })
+			.values({ id, ...owner, ...materials, ...written, context, status: 'stopped' })
 			.onConflictDoNothing()
 			.returning({ id: analyses.id });
 		if (added.length === 0) return standing(access, hash);

@@ -2,6 +2,7 @@ import { getTableColumns, sql } from 'drizzle-orm';
 import type { AnalysisProgress, AnalysisResult, FindingKind } from '#lib/contracts/analysisResult.ts';
 import type { AnalysisStatus } from '#lib/contracts/materials.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
+import type { PlanContext } from '#lib/contracts/planContext.ts';
 import { analyses } from '#lib/server/db/schema.ts';
 
 export type AnalysisFailure = { readonly code: string; readonly message: string; readonly reference?: string };
@@ -20,6 +21,8 @@ export type ListedAnalysis = {
 	readonly failure: AnalysisFailure | null;
 	/** the few numbers of a finished analysis that a line of a list holds */
 	readonly headline: Headline | null;
+	/** what had been seen of the matrix when the plan was written down; null where that was not kept yet */
+	readonly context: PlanContext | null;
 	/** the plan was written down before anything ran */
 	readonly declaredAt: string | null;
 	readonly createdBy: string;

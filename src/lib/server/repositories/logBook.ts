@@ -36,6 +36,7 @@ export const LOGGED_ACTIONS = [
 	'overlap-run.replaced',
 	'overlap-run.deleted',
 	'overlap-run.restored',
+	'overlap-run.opened',
 	'name.decided',
 	'name.withdrawn',
 	'analysis.declared',
