@@ -12,6 +12,7 @@ import { nodeAverages } from '#lib/statistics/nodeAverages.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
 import { permutationTest } from '#lib/statistics/permutationTest.ts';
+import { resultBlocks } from './blocks/resultBlocks.ts';
 import { findingOf } from './findingOf.ts';
 import { describePermutation } from './describePermutation.ts';
 import { nodeRows } from './nodeRows.ts';
@@ -65,6 +66,7 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 			nested: { ...averages.nested, ...tails(outcome.free.statistics['nodes-nested']) },
 			plain: { ...averages.plain, ...tails(outcome.free.statistics['nodes-plain']) }
 		},
+		...resultBlocks({ inputs, plan, prepared, design, outcome, regression: line, pairAges, lower }),
 		finding: findingOf({
 			compared,
 			permutation,

@@ -3,6 +3,19 @@ import { remarkSchema } from './remark.ts';
 import { AGE_UNITS } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
 import { ALTERNATIVES, STATISTICS } from './plan.ts';
+import {
+	ageClassSchema,
+	alsoTestedSchema,
+	cladeRowSchema,
+	fallBlockSchema,
+	influenceBlockSchema,
+	matrixRegressionBlockSchema,
+	partialBlockSchema,
+	powerBlockSchema,
+	signalBlockSchema,
+	sistersBlockSchema,
+	treesBlockSchema
+} from './resultBlocks.ts';
 
 const probability = z.number().min(0).max(1);
 
@@ -46,12 +59,17 @@ export const permutationSchema = z.object({
 	/** quantiles of the shuffled statistic: [probability, value] */
 	quantiles: z.array(z.tuple([probability, z.number()])),
 	/** null when the sides hold too few species to shuffle */
-	withinDeepestSplit: deepestSplitSchema.nullable()
+	withinDeepestSplit: deepestSplitSchema.nullable(),
+	/** p of the plan's statistic adjusted for what was tested beside it; only when something was */
+	pAdjusted: probability.optional(),
+	also: z.array(alsoTestedSchema).optional()
 });
 
 export const nodeTestSchema = z
 	.object({ slope: z.number(), intercept: z.number(), rSquared: z.number() })
-	.extend(tailsSchema.shape);
+	.extend(tailsSchema.shape)
+	/** of the intercept, which at this level is a test of its own */
+	.extend({ interceptTails: tailsSchema.optional() });
 
 export const nodeSchema = z.object({
 	/** preorder index in the pruned tree */
@@ -132,6 +150,16 @@ export const analysisResultSchema = z.object({
 	permutation: permutationSchema,
 	mantel: z.object({ r: z.number(), z: z.number(), spearman: z.number() }),
 	nodeAverages: z.object({ nodes: z.array(nodeSchema), nested: nodeTestSchema, plain: nodeTestSchema }),
+	partial: partialBlockSchema.optional(),
+	matrixRegression: matrixRegressionBlockSchema.optional(),
+	clades: z.array(cladeRowSchema).optional(),
+	sisters: sistersBlockSchema.optional(),
+	trees: treesBlockSchema.optional(),
+	ageClasses: z.array(ageClassSchema).optional(),
+	fall: fallBlockSchema.optional(),
+	influence: influenceBlockSchema.optional(),
+	power: powerBlockSchema.optional(),
+	signal: signalBlockSchema.optional(),
 	finding: findingSchema,
 	engine: z.object({ version: z.string(), seed: z.number(), kernel: z.string() }),
 	plate: plateDataSchema
