@@ -14,6 +14,7 @@ import {
 	uniqueIndex
 } from 'drizzle-orm/pg-core';
 import type { AnalysisProgress, AnalysisResult } from '#lib/contracts/analysisResult.ts';
+import type { CovariateReadingNotes } from '#lib/contracts/covariates.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import type { PlanContext } from '#lib/contracts/planContext.ts';
@@ -180,6 +181,35 @@ export const overlapRuns = pgTable(
 		deletedAt: deletedAt()
 	},
 	(table) => [index('overlap_runs_study').on(table.studyId)]
+);
+
+/** A species-by-species matrix that may go with both age and overlap, such as geographic distance. */
+export const covariates = pgTable(
+	'covariates',
+	{
+		id: id(),
+		studyId: text('study_id')
+			.notNull()
+			.references(() => studies.id, { onDelete: 'cascade' }),
+		label: text('label').notNull(),
+		/** the text as given: a matrix, or a table of places */
+		textHash: text('text_hash')
+			.notNull()
+			.references(() => texts.hash),
+		species: jsonb('species').$type<string[]>().notNull(),
+		/** as `overlap_runs.lower`: values as given or computed, not turned into similarities */
+		lower: bytea('lower').notNull(),
+		/** where the values come from and how the text was read */
+		reading: jsonb('reading').$type<CovariateReadingNotes>().notNull(),
+		remarks: jsonb('remarks').$type<Remark[]>().notNull(),
+		replaces: text('replaces'),
+		createdBy: text('created_by')
+			.notNull()
+			.references(() => users.id),
+		createdAt: createdAt(),
+		deletedAt: deletedAt()
+	},
+	(table) => [index('covariates_study').on(table.studyId)]
 );
 
 /** One row per name in the data; the newest wins, older ones stay as history. */
