@@ -3,6 +3,7 @@ import { analysisResultSchema, progressSchema } from './analysisResult.ts';
 import { AGE_UNITS, ANALYSIS_STATUSES, TREE_SET_KINDS } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
 import { planSchema } from './plan.ts';
+import { planContextSchema } from './planContext.ts';
 import { remarkSchema } from './remark.ts';
 import { figureSettingsSchema } from './report.ts';
 
@@ -145,6 +146,8 @@ export const analysisAnswerSchema = z.object({
 	/** while it works; null before and after */
 	progress: progressSchema.omit({ newSlopes: true }).nullable(),
 	plan: planSchema,
+	/** what had been seen of the matrix when the plan was written down; null where that was not kept yet */
+	seenBefore: planContextSchema.nullable(),
 	hash: z.string(),
 	createdAt: time,
 	finishedAt: time.nullable(),

@@ -87,6 +87,15 @@ describe('analyses', () => {
 		expect(await response.text()).toContain('event: finished\n');
 	});
 
+	it('tells that the matrix was read through the API before the plan was written', async () => {
+		const materials = await bringMaterials(client, await makeStudy(client));
+		const before = await finishedAnalysis(client, (await runAnalysis(client, materials, { seed: 1 })).analysis);
+		expect(before.seenBefore).toMatchObject({ opened: null, analysedBefore: 0 });
+		await client.get(`/overlap-runs/${materials.overlapRun}`, z.unknown());
+		const after = await finishedAnalysis(client, (await runAnalysis(client, materials, { seed: 2 })).analysis);
+		expect(after.seenBefore).toMatchObject({ opened: { by: 'script' }, analysedBefore: 1 });
+	});
+
 	it('says when names have changed since', async () => {
 		const other = await runAnalysis(client, await bringMaterials(client, await makeStudy(client)));
 		const before = await client.get(`/analyses/${other.analysis}`, analysisAnswerSchema);

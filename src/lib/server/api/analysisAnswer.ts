@@ -6,12 +6,13 @@ type Answer = z.infer<typeof analysisAnswerSchema>;
 type Changes = readonly { readonly code: string; readonly message: string }[];
 
 export function analysisAnswer(analysis: Analysis, changes: Changes): Answer {
-	const { id, status, plan, hash, createdAt, finishedAt, result, failure } = analysis;
+	const { id, status, plan, context, hash, createdAt, finishedAt, result, failure } = analysis;
 	return {
 		id,
 		status,
 		progress: progressOf(analysis),
 		plan,
+		seenBefore: context,
 		hash,
 		createdAt,
 		finishedAt,

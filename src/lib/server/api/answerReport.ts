@@ -1,4 +1,5 @@
 import { writeCaption } from '#lib/analysis/words/caption.ts';
+import { contextSentences } from '#lib/analysis/words/contextSentences.ts';
 import { figureSettingsSchema } from '#lib/contracts/report.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
@@ -16,8 +17,9 @@ export async function answerReport(access: Access, analysis: FinishedAnalysis, a
 	const saved = await reports.list(access, { analysis: analysis.id });
 	const report = asked === null ? saved[0] : found(saved.find(({ id }) => id === asked) ?? null);
 	const { result } = analysis;
-	const words: ReportWords =
-		report === undefined ? { title: result.finding.title, caption: writeCaption(result), notes: '' } : report;
+	const written = report ?? { title: result.finding.title, caption: writeCaption(result), notes: '' };
+	const seenBefore = analysis.context === null ? '' : contextSentences(analysis.context, 'reader').join(' ');
+	const words: ReportWords = { ...written, seenBefore };
 	const figure = report?.figure ?? figureSettingsSchema.parse({});
 	const pdf = await renderReportPdf(result, words, plateSettings(result, figure));
 	await noteExport(access, { analysis: analysis.id, file: 'report.pdf', ...(report === undefined ? {} : { report: report.id }) });

@@ -5,7 +5,13 @@ import type { FigureSettings } from '#lib/server/exports/figureSettings.ts';
 import { exportFont } from '#lib/server/exports/platePng.ts';
 import { drawPlate, type PlateSvg } from '#lib/server/exports/plateSvg.ts';
 
-export type ReportWords = { readonly title: string; readonly caption: string; readonly notes: string };
+export type ReportWords = {
+	readonly title: string;
+	readonly caption: string;
+	readonly notes: string;
+	/** what had been seen of the matrix before the plan was written; '' where that was not kept */
+	readonly seenBefore: string;
+};
 
 const POINTS_PER_MM = 72 / 25.4;
 /** A4 less two margins is 174 mm, the widest of the journal widths. */
@@ -32,6 +38,7 @@ export async function renderReportPdf(
 	section(document, 'Notes', words.notes);
 	section(document, 'What this does not show', result.finding.limits.join('\n'));
 	section(document, 'Cautions', result.finding.cautions.map(({ message }) => message).join('\n'));
+	section(document, 'What had been seen before the plan', words.seenBefore);
 	section(document, 'How it was made', origin(result));
 	document.end();
 	return finished;

@@ -7,6 +7,7 @@ import { overlapRuns } from '#lib/server/db/schema.ts';
 import { compute } from '#lib/server/jobs/pool.ts';
 import * as logBook from './logBook.ts';
 import { newId } from './newId.ts';
+import * as openings from './openings.ts';
 import { bytesOf, listedRun, lowerOf, overlapRunFromRow, type ListedRun, type OverlapRun } from './overlapRunRows.ts';
 import { within } from './scope.ts';
 import * as studies from './studies.ts';
@@ -148,6 +149,7 @@ export function copy(access: Access, id: string): Promise<OverlapRun | null> {
 		if (copied === undefined) throw new Error('Expected the copy back from the database; got nothing.');
 		await studies.touch(access);
 		await logBook.append(access, { action: 'overlap-run.added', detail: { overlapRun: row.id, label: row.label, copyOf: id } });
+		await openings.inherit(access, row, { access, id });
 		return overlapRunFromRow(copied);
 	});
 }

@@ -4,6 +4,7 @@ import { db, transaction } from '#lib/server/db/client.ts';
 import { labs, memberships, nameDecisions, overlapRuns, studies, treeSets } from '#lib/server/db/schema.ts';
 import * as logBook from './logBook.ts';
 import { newId } from './newId.ts';
+import * as openings from './openings.ts';
 
 export type Study = {
 	readonly id: string;
@@ -159,10 +160,11 @@ async function copyMaterials(source: Access, target: Access): Promise<void> {
 		.select()
 		.from(overlapRuns)
 		.where(and(eq(overlapRuns.studyId, from), isNull(overlapRuns.deletedAt)));
-	for (const row of runs)
-		await db()
-			.insert(overlapRuns)
-			.values({ ...row, id: newId(), studyId, createdBy, replaces: null });
+	for (const row of runs) {
+		const copied = { ...row, id: newId(), studyId, createdBy, replaces: null };
+		await db().insert(overlapRuns).values(copied);
+		await openings.inherit(target, copied, { access: source, id: row.id });
+	}
 	const decided = await db().select().from(nameDecisions).where(eq(nameDecisions.studyId, from)).orderBy(nameDecisions.id);
 	for (const { fromName, toTip, why, withdrawn } of decided) {
 		await db().insert(nameDecisions).values({ studyId, fromName, toTip, why, withdrawn, decidedBy: createdBy });

@@ -5,6 +5,7 @@ import { compute } from '#lib/server/jobs/pool.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as names from '#lib/server/repositories/names.ts';
 import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
 import * as texts from '#lib/server/repositories/texts.ts';
@@ -27,12 +28,15 @@ export async function studyHome(access: Access, study: string) {
 	const asked = await analyses.list(access);
 	const saved = await reports.list(access);
 	const pairs = (await names.matching(access))?.pairs ?? null;
+	const drawable = await openings.drawable(access, runs);
 	const order = dataOrder(trees[0]?.tips ?? [], pairs ?? []);
 	return {
 		asked: questionParts({ study, sharedSpecies: pairs?.length ?? null, ...choicesOf({ trees, runs, plan: asked[0]?.plan }) }),
 		trees: trees.map(treeFacts),
 		drawing: await drawnTree(trees),
-		runs: await Promise.all(runs.slice(0, WINGS_SHOWN).map(({ id, label }) => thumbnail(access, { id, label, order }))),
+		runs: await Promise.all(
+			runs.slice(0, WINGS_SHOWN).map(({ id, label }) => thumbnail(access, { id, label, order: drawable.has(id) ? order : null }))
+		),
 		moreRuns: Math.max(0, runs.length - WINGS_SHOWN),
 		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
 		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
@@ -79,11 +83,11 @@ function dataOrder(tips: readonly string[], pairs: readonly { readonly tip: stri
 	return tips.map((tip) => nameOf.get(tip) ?? tip);
 }
 
-type Thumbnail = { id: string; label: string; order: readonly string[] };
+type Thumbnail = { id: string; label: string; /** null where it stays folded */ order: readonly string[] | null };
 
 async function thumbnail(access: Access, { id, label, order }: Thumbnail) {
-	const run = await overlapRuns.find(access, id);
-	return { id, label, wing: run === null ? null : tinyWing(run, order) };
+	const run = order === null ? null : await overlapRuns.find(access, id);
+	return { id, label, wing: run === null || order === null ? null : tinyWing(run, order) };
 }
 
 async function analysisLine(access: Access, listed: analyses.ListedAnalysis) {

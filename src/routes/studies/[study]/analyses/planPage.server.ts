@@ -8,6 +8,7 @@ import { compute, ComputeRefusedError } from '#lib/server/jobs/pool.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import { computeArgument, decisionsFor } from '#lib/server/repositories/analysisInputs.ts';
 import * as names from '#lib/server/repositories/names.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { inForce } from './inForce.server.ts';
@@ -21,7 +22,7 @@ export type Refused = { readonly code: string; readonly message: string; readonl
 
 /** Everything the page of a new plan shows. `query` holds what is chosen so far, as the form writes it. */
 export async function planPage(access: Access, query: URLSearchParams) {
-	const [trees, runs, asked] = [await treeSets.list(access), await overlapRuns.list(access), await analyses.list(access)];
+	const [trees, runs] = [await treeSets.list(access), await overlapRuns.list(access)];
 	const materials = {
 		trees: trees.map(({ id, label, kind, treeCount, tipCount, rootAge, ageUnit }) => ({
 			...{ id, label, kind, treeCount, tipCount, rootAge, ageUnit }
@@ -49,13 +50,12 @@ export async function planPage(access: Access, query: URLSearchParams) {
 		...{ alpha: '0.05', permutations: String(proposedShuffles(run.species.length)), seed: String(randomInt(PROPOSED_SEEDS)) }
 	};
 	const values = chosenValues(base, query);
-	const before = asked.filter(({ overlapRunId }) => overlapRunId === values.overlapRun);
 	return {
 		...materials,
 		plan: {
 			values,
 			outlook: await outlookOf(access, values),
-			before: { count: before.length, last: before[0]?.finishedAt ?? before[0]?.createdAt ?? null }
+			context: await openings.contextOf(access, values.overlapRun)
 		}
 	};
 }

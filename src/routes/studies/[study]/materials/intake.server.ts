@@ -3,6 +3,7 @@ import { InputError } from '#lib/remarks/inputError.ts';
 import type { Place } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { z } from 'zod';
@@ -107,5 +108,7 @@ async function store(
 	const request = overlapRunRequest(label, text, answers);
 	const kept =
 		replaces === null ? await overlapRuns.create(access, request) : await overlapRuns.replace(access, replaces, request);
+	// The page draws a matrix before it is kept.
+	if (kept !== null) await openings.note(access, kept, 'brought');
 	return kept?.id ?? null;
 }

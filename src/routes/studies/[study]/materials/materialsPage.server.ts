@@ -3,6 +3,7 @@ import type { MaterialName } from '#lib/contracts/materialForms.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import type { TreeSet } from '#lib/server/repositories/treeSetRows.ts';
@@ -25,9 +26,10 @@ export async function materialsPage(access: Access, { withDeleted }: { withDelet
 		staleFor: (id) => stale.filter(({ through }) => through.includes(id)).length
 	};
 	const printed = await printedFormRemark(access, runs);
+	const drawable = await openings.drawable(access, runs);
 	return {
 		trees: await Promise.all(trees.map((set) => keptTree(set, uses))),
-		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed }))),
+		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed, drawable }))),
 		deleted: withDeleted ? gone.map((material) => goneLine(material, [...trees, ...runs])) : []
 	};
 }
@@ -52,9 +54,11 @@ async function keptTree(set: TreeSet, { usedBy, staleFor }: Uses) {
 type RunFrame = Uses & {
 	readonly order: readonly string[];
 	readonly printed: { readonly run: string; readonly remark: Remark } | null;
+	/** runs that may be drawn before they are opened */
+	readonly drawable: ReadonlySet<string>;
 };
 
-async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order, printed }: RunFrame) {
+async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order, printed, drawable }: RunFrame) {
 	const { id, label, measure, createdAt, species } = run;
 	const remarks = printed?.run === id ? [printed.remark, ...run.remarks] : run.remarks;
 	const whole = await overlapRuns.find(access, id);
@@ -68,7 +72,7 @@ async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order
 		...{ usedBy: usedBy(id), stale: staleFor(id) },
 		questions: matrixSettleQuestions(run.remarks, {}).filter(({ isOpen }) => isOpen),
 		drawing: null,
-		wing: whole === null ? null : tinyWing(whole, order),
+		wing: whole === null || !drawable.has(id) ? null : tinyWing(whole, order),
 		offersCorrection: printed?.run === id && printed.remark.code === 'uncorrected-i'
 	};
 }

@@ -2,6 +2,7 @@ import { correctedI, uncorrectedIRemark } from '#lib/overlap/uncorrectedI.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { squareRows } from '#lib/server/api/squareRows.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import { matrixOf, type ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 
@@ -39,5 +40,6 @@ export async function keepCorrected(access: Access, id: string): Promise<string 
 	const rows = squareRows(values, species.length).map((row) => row.map((value) => (Number.isNaN(value) ? null : value)));
 	const label = run.label.slice(0, MOST_CHARACTERS - SUFFIX.length) + SUFFIX;
 	const kept = await overlapRuns.create(access, { label, measure: 'warren-i', matrix: { species: [...species], values: rows } });
+	await openings.inherit(access, kept, { access, id });
 	return kept.id;
 }

@@ -1,5 +1,6 @@
 import { error } from '@sveltejs/kit';
 import { can } from '#lib/server/permissions.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import type { Actions, PageServerLoad } from './$types';
 import { leaveOutForGaps, NOT_FOUND, removeRun, renameRun } from './runActions.server.ts';
@@ -9,6 +10,7 @@ export const load: PageServerLoad = async ({ params, locals, url }) => {
 	const access = await can(locals.user, 'read', { study: params.study });
 	const run = await overlapRuns.find(access, params.run);
 	if (run === null) error(404, NOT_FOUND);
+	await openings.note(access, run, 'page');
 	return runPage(access, run, url.searchParams.get('species'));
 };
 

@@ -3,6 +3,7 @@ import type { PairMatrix } from '#lib/overlap/pairMatrix.ts';
 import { attachment } from '#lib/server/api/csv.ts';
 import { can } from '#lib/server/permissions.ts';
 import * as logBook from '#lib/server/repositories/logBook.ts';
+import * as openings from '#lib/server/repositories/openings.ts';
 import { matrixOf } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import { NOT_FOUND } from './runActions.server.ts';
@@ -15,6 +16,7 @@ export async function download({ locals, params }: Asked, { file, write }: Writt
 	const access = await can(locals.user, 'download', { study: params.study });
 	const run = await overlapRuns.find(access, params.run);
 	if (run === null) error(404, NOT_FOUND);
+	await openings.note(access, run, 'file');
 	await logBook.append(access, { action: 'exported', detail: { overlapRun: run.id, file } });
 	const headers = {
 		'content-type': 'text/csv; charset=utf-8; header=present',

@@ -1,3 +1,4 @@
+import { contextSentences } from '#lib/analysis/words/contextSentences.ts';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
@@ -16,7 +17,7 @@ export async function reportPage(access: Access, report: Report) {
 	const words = { id, title, caption, notes, figure, author, createdAt, changedAt, captionEdited, analysisId: report.analysisId };
 	// The analysis of a report may be deleted for a while; its words stay readable.
 	if (analysis?.result == null) return { report: words, found: null };
-	const { plan, hash, decisions, declaredAt, finishedAt } = analysis;
+	const { plan, hash, decisions, declaredAt, finishedAt, context } = analysis;
 	const tree = await treeSets.findKept(access, analysis.treeSetId);
 	const run = await overlapRuns.findListed(access, analysis.overlapRunId);
 	if (tree === null || run === null) throw new Error(`Expected the materials of analysis ${analysis.id}; one is not there.`);
@@ -25,6 +26,7 @@ export async function reportPage(access: Access, report: Report) {
 		found: {
 			...resultWords(analysis.result),
 			...{ decisions, hash, declaredAt, finishedAt },
+			seenBefore: context === null ? [] : contextSentences(context, 'reader'),
 			facts: [...comparedFacts({ tree, run }, plan), ...planFacts(plan, analysis.result.permutation)],
 			materials: [
 				{ what: 'Tree', label: tree.label, textHash: tree.textHash },
