@@ -24,12 +24,12 @@ export function cellNumber(cell: string, decimal: Decimal): number {
 	return POINT_NUMBER.test(plain) ? Number(plain) : Number.NaN;
 }
 
-/** The decimal sign most cells use; a comma only where commas do not separate cells. */
-export function decimalOf(cells: readonly string[], commaSeparated: boolean): Decimal {
-	if (commaSeparated) return '.';
+/** The decimal sign that most cells use, where commas do not separate them. */
+export function decimalOf(count: number, textOf: (k: number) => string): Decimal {
 	let points = 0;
 	let commas = 0;
-	for (const cell of cells) {
+	for (let k = 0; k < count; k++) {
+		const cell = textOf(k);
 		if (cell.includes('.')) points += 1;
 		else if (COMMA_NUMBER.test(cell) && cell.includes(',')) commas += 1;
 	}

@@ -31,17 +31,18 @@ export function foldHalves(entries: MatrixEntries, options: FoldOptions): Folded
 		triangle = zeroHalf === 'upper' ? 'lower' : 'upper';
 		remarks.push(zeroFilledRemark(zeroHalf));
 	}
-	const { values, worst } = fold(raw, n, triangle);
+	const worst = foldInPlace(raw, n, triangle);
 	if (remarks.length === 0 && options.triangle === undefined && worst.gap > ASYMMETRY_TOLERANCE * options.full) {
-		remarks.push(asymmetryRemark(entries.species, raw, worst));
+		remarks.push(asymmetryRemark(entries.species, worst));
 	}
-	return { values, shape: shapeOf(halves, zeroHalf, options.isPairList), remarks };
+	return { values: raw, shape: shapeOf(halves, zeroHalf, options.isPairList), remarks };
 }
 
 function spread(entries: MatrixEntries, tolerance: number): Float64Array {
 	const { species, from, to, value } = entries;
 	const raw = new Float64Array(species.length ** 2).fill(Number.NaN);
-	for (const [k, number] of value.entries()) {
+	for (let k = 0; k < value.length; k++) {
+		const number = value[k] ?? Number.NaN;
 		const at = (from[k] ?? 0) * species.length + (to[k] ?? 0);
 		const before = raw[at] ?? Number.NaN;
 		if (Math.abs(before - number) > tolerance) {
@@ -87,23 +88,24 @@ function shapeOf({ upper, lower }: Halves, zeroHalf: 'upper' | 'lower' | undefin
 	return lower.given === 0 || zeroHalf === 'lower' ? 'upper' : 'square';
 }
 
-type Worst = { readonly i: number; readonly j: number; readonly gap: number };
+type Worst = { readonly i: number; readonly j: number; readonly upper: number; readonly lower: number; readonly gap: number };
 
-function fold(raw: Float64Array, n: number, triangle: MatrixTriangle): { values: Float64Array; worst: Worst } {
-	const values = new Float64Array(n * n).fill(Number.NaN);
-	let worst: Worst = { i: 0, j: 0, gap: 0 };
+/** Puts the value of each pair in both places, NaN on the diagonal; returns the pair whose halves differed most. */
+function foldInPlace(values: Float64Array, n: number, triangle: MatrixTriangle): Worst {
+	let worst: Worst = { i: 0, j: 0, upper: 0, lower: 0, gap: 0 };
 	for (let i = 0; i < n; i++) {
+		values[i * n + i] = Number.NaN;
 		for (let j = i + 1; j < n; j++) {
-			const upper = raw[i * n + j] ?? Number.NaN;
-			const lower = raw[j * n + i] ?? Number.NaN;
+			const upper = values[i * n + j] ?? Number.NaN;
+			const lower = values[j * n + i] ?? Number.NaN;
 			const gap = Math.abs(upper - lower);
-			if (gap > worst.gap) worst = { i, j, gap };
+			if (gap > worst.gap) worst = { i, j, upper, lower, gap };
 			const value = joined(upper, lower, triangle);
 			values[i * n + j] = value;
 			values[j * n + i] = value;
 		}
 	}
-	return { values, worst };
+	return worst;
 }
 
 /** A pair given on one side only has that value, whichever half was asked for. */
@@ -120,10 +122,9 @@ function zeroFilledRemark(half: 'upper' | 'lower'): Remark {
 	return remark('settle', 'zero-filled-half', message);
 }
 
-function asymmetryRemark(species: readonly string[], raw: Float64Array, { i, j }: Worst): Remark {
-	const n = species.length;
+function asymmetryRemark(species: readonly string[], { i, j, upper, lower }: Worst): Remark {
 	const [name = '', otherName = ''] = [species[i], species[j]];
-	const values = `${raw[i * n + j] ?? 0} one way and ${raw[j * n + i] ?? 0} the other`;
+	const values = `${upper} one way and ${lower} the other`;
 	const message = `The two halves differ, most for “${name}” and “${otherName}”: ${values}. Their average is used. Confirm the triangle: average, upper or lower.`;
 	return remark('settle', 'asymmetric', message, { name, otherName });
 }

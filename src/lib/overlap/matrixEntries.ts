@@ -1,30 +1,37 @@
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Place } from '#lib/remarks/remark.ts';
+import { cellPlace, cellText, type CellTable } from './cellTable.ts';
 import { SPECIES_LIMIT } from './matrixReading.ts';
 
 /**
  * The cells of a matrix that hold something, in the order of the text: cell k belongs to species `from[k]` and `to[k]`
- * (row and column of a square). `line` and `column` count from 1 in rows and cells of the text; 0 when there is no text.
+ * (row and column of a square).
  */
 export type EntryPlaces = {
 	readonly species: readonly string[];
 	readonly from: ArrayLike<number>;
 	readonly to: ArrayLike<number>;
-	readonly line: ArrayLike<number>;
-	readonly column: ArrayLike<number>;
+	/** where each entry stands in the text; null when the matrix did not come as text */
+	readonly source: EntrySource | null;
 };
-export type TextEntries = EntryPlaces & { readonly text: readonly string[] };
+export type EntrySource = { readonly table: CellTable; readonly cells: Int32Array };
+export type TextEntries = EntryPlaces & { readonly source: EntrySource };
 export type MatrixEntries = EntryPlaces & { readonly value: Float64Array };
 
 export type EntryPlace = { readonly said: string; readonly where: Place };
 
 /** Where cell k stands, for a message and for a machine. */
 export function entryPlace(entries: EntryPlaces, k: number): EntryPlace {
-	const { line, column } = { line: entries.line[k] ?? 0, column: entries.column[k] ?? 0 };
 	const name = entries.species[entries.from[k] ?? -1] ?? '';
 	const otherName = entries.species[entries.to[k] ?? -1] ?? '';
-	if (line === 0) return { said: `Row “${name}”, column “${otherName}”`, where: { name, otherName } };
+	if (entries.source === null) return { said: `Row “${name}”, column “${otherName}”`, where: { name, otherName } };
+	const { line, column } = cellPlace(entries.source.table, entries.source.cells[k] ?? 0);
 	return { said: `Line ${line}, column ${column}`, where: { line, column, name, otherName } };
+}
+
+/** What the text says in entry k. */
+export function entryText({ source }: TextEntries, k: number): string {
+	return cellText(source.table, source.cells[k] ?? 0);
 }
 
 /** @throws {InputError} `too-many-species` */

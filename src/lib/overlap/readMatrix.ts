@@ -23,14 +23,14 @@ import { squareEntries } from './squareLayout.ts';
  */
 export function readMatrix(source: string | Uint8Array, options: MatrixOptions): MatrixReading {
 	const decoded = readText(source);
-	const { separator, rows } = readCells(decoded.text);
-	const isList = isPairList(rows);
-	const layout = isList ? pairEntries(rows) : { ...squareEntries(rows), valueHeader: '' };
-	const numbers = readNumbers(layout.entries, separator);
+	const table = readCells(decoded.text);
+	const isList = isPairList(table);
+	const layout = isList ? pairEntries(table) : { ...squareEntries(table), valueHeader: '' };
+	const numbers = readNumbers(layout.entries);
 	const settled = settleMatrix(numbers.entries, { isPairList: isList, valueHeader: layout.valueHeader }, options);
 	return {
 		...settled,
-		separator,
+		separator: table.separator,
 		decimal: numbers.decimal,
 		remarks: [...decoded.remarks, ...layout.remarks, ...settled.remarks]
 	};
@@ -67,7 +67,9 @@ function refuseUnsquare(names: readonly string[], values: MatrixBody['values']):
 }
 
 function bodyEntries(species: readonly string[], values: MatrixBody['values']): MatrixEntries {
-	const [from, to, kept]: [number[], number[], number[]] = [[], [], []];
+	const most = species.length ** 2;
+	const [from, to, kept] = [new Int32Array(most), new Int32Array(most), new Float64Array(most)];
+	let count = 0;
 	for (const [i, row] of values.entries()) {
 		for (const [j, value] of row.entries()) {
 			if (value === null) continue;
@@ -76,10 +78,11 @@ function bodyEntries(species: readonly string[], values: MatrixBody['values']): 
 				const message = `Row “${name}”, column “${otherName}”: ${value} is not a number. Send null for a missing value.`;
 				throw new InputError('not-a-number', message, { name, otherName });
 			}
-			from.push(i);
-			to.push(j);
-			kept.push(value);
+			from[count] = i;
+			to[count] = j;
+			kept[count] = value;
+			count += 1;
 		}
 	}
-	return { species, from, to, line: [], column: [], value: Float64Array.from(kept) };
+	return { species, from, to, source: null, value: kept.subarray(0, count) };
 }

@@ -23,23 +23,27 @@ export function settleMatrix(
 ): Omit<MatrixReading, 'separator' | 'decimal'> {
 	refuseTooFew(entries.species);
 	const split = splitDiagonal(entries);
-	if (split.pairs.length === 0)
+	if (split.pairs.count === 0)
 		throw new InputError('empty', 'Expected a value for at least one pair of species; every pair is missing.');
 	const scale = judgeScale(split, options);
 	const full = scale.value === 'percent' ? 100 : 1;
 	const kind = judgeKind(entries, { split, full, header: layout.valueHeader }, options);
 	const rangeRemarks = checkRange(entries, { kind: kind.value, full }, options);
 	const folded = foldHalves(entries, { isPairList: layout.isPairList, triangle: options.confirm?.triangle, full });
-	const matrix = asSimilarities(entries.species, folded.values, { kind: kind.value, full });
+	const matrix = similaritiesInPlace(entries.species, folded.values, { kind: kind.value, full });
 	const remarks = [...scale.remarks, ...kind.remarks, ...rangeRemarks, ...folded.remarks, ...pairRemarks(matrix)];
 	return { matrix, shape: folded.shape, kind: kind.value, scale: scale.value, remarks };
 }
 
-function asSimilarities(species: readonly string[], folded: Float64Array, frame: { kind: MatrixKind; full: number }): PairMatrix {
-	const values = folded.map((value) => {
-		const share = value / frame.full;
-		return withoutRounding(frame.kind === 'distance' ? 1 - share : share);
-	});
+function similaritiesInPlace(
+	species: readonly string[],
+	values: Float64Array,
+	frame: { kind: MatrixKind; full: number }
+): PairMatrix {
+	for (let at = 0; at < values.length; at++) {
+		const share = (values[at] ?? Number.NaN) / frame.full;
+		values[at] = withoutRounding(frame.kind === 'distance' ? 1 - share : share);
+	}
 	for (let i = 0; i < species.length; i++) values[i * species.length + i] = 1;
 	return { species, values };
 }

@@ -1,12 +1,14 @@
 import { isMissing, isWord } from './cellNumber.ts';
-import type { CellRow } from './readCells.ts';
+import { cellAt, rowCells, rowCount, rowLength, type CellTable } from './cellTable.ts';
 
 /**
- * How a square table names its species. `cells[skip + j]` of a body row is the value of column j; `columnNames` is
+ * How a square table names its species. Cell `skip + j` of a body row is the value of column j; `columnNames` is
  * undefined when only the first column has names.
  */
 export type SquareHeader = {
-	readonly body: readonly CellRow[];
+	readonly table: CellTable;
+	/** row of the table that is the first of the body */
+	readonly bodyStart: 0 | 1;
 	readonly rowNames: readonly string[];
 	readonly columnNames: readonly string[] | undefined;
 	/** cell of the header row that names column 0 */
@@ -18,28 +20,26 @@ export type SquareHeader = {
 };
 
 /** Finds the names of a square table: in the first row and column, in the first column only, or in the first row only. */
-export function squareHeader(rows: readonly CellRow[]): SquareHeader {
-	const [first, ...rest] = rows;
-	const head = first?.cells ?? [];
-	if (isNamelessBody(head, rest)) return headerOnly(rest, { names: head, skip: 0, firstNamed: 0 });
-	if (!isHeader(head, rest)) {
-		return { body: rows, rowNames: names(rows), columnNames: undefined, firstNamed: 1, skip: 1, namedByHeader: false };
+export function squareHeader(table: CellTable): SquareHeader {
+	const head = rowCells(table, 0);
+	if (isNamelessBody(head, table)) return headerOnly(table, { names: head, skip: 0, firstNamed: 0 });
+	if (!isHeader(head, table)) {
+		const rowNames = firstCells(table, 0);
+		return { table, bodyStart: 0, rowNames, columnNames: undefined, firstNamed: 1, skip: 1, namedByHeader: false };
 	}
-	const rowNames = names(rest);
-	const firstNamed = hasCorner(head, rest) ? 1 : 0;
+	const rowNames = firstCells(table, 1);
+	const firstNamed = hasCorner(head, table) ? 1 : 0;
 	const columnNames = head.slice(firstNamed);
 	if (isNumbering(rowNames) && columnNames.length === rowNames.length && columnNames.every(isWord)) {
-		return headerOnly(rest, { names: columnNames, skip: 1, firstNamed });
+		return headerOnly(table, { names: columnNames, skip: 1, firstNamed });
 	}
-	return { body: rest, rowNames, columnNames, firstNamed, skip: 1, namedByHeader: false };
+	return { table, bodyStart: 1, rowNames, columnNames, firstNamed, skip: 1, namedByHeader: false };
 }
 
-function headerOnly(
-	body: readonly CellRow[],
-	header: { names: readonly string[]; skip: 0 | 1; firstNamed: number }
-): SquareHeader {
+function headerOnly(table: CellTable, header: { names: readonly string[]; skip: 0 | 1; firstNamed: number }): SquareHeader {
 	return {
-		body,
+		table,
+		bodyStart: 1,
 		rowNames: header.names,
 		columnNames: header.names,
 		firstNamed: header.firstNamed,
@@ -48,32 +48,39 @@ function headerOnly(
 	};
 }
 
-function names(rows: readonly CellRow[]): string[] {
-	return rows.map(({ cells }) => cells[0] ?? '');
+/** The first cell of each row from `start` on. */
+function firstCells(table: CellTable, start: 0 | 1): string[] {
+	return Array.from({ length: rowCount(table) - start }, (_, row) => cellAt(table, start + row, 0));
+}
+
+/** The widest row below the first. */
+function bodyWidth(table: CellTable): number {
+	let widest = 0;
+	for (let row = 1; row < rowCount(table); row++) widest = Math.max(widest, rowLength(table, row));
+	return widest;
 }
 
 /** A header of words over as many rows of numbers, none of which begins with a name. */
-function isNamelessBody(head: readonly string[], rest: readonly CellRow[]): boolean {
-	if (rest.length !== head.length || head.length < 2 || !head.every(isWord)) return false;
-	return rest.every(({ cells }) => cells.length <= head.length && !isWord(cells[0] ?? ''));
+function isNamelessBody(head: readonly string[], table: CellTable): boolean {
+	if (rowCount(table) - 1 !== head.length || head.length < 2 || !head.every(isWord)) return false;
+	return bodyWidth(table) <= head.length && !firstCells(table, 1).some(isWord);
 }
 
 /** Species may be numbers, so a first row that repeats the first column is a header too. */
-function isHeader(head: readonly string[], rest: readonly CellRow[]): boolean {
+function isHeader(head: readonly string[], table: CellTable): boolean {
 	const tail = head.slice(1).filter((cell) => !isMissing(cell));
-	if (rest.length === 0) return false;
+	if (rowCount(table) === 1) return false;
 	const words = tail.filter(isWord).length;
 	if (tail.length > 0 && words * 2 >= tail.length) return true;
-	const below = new Set(names(rest));
+	const below = new Set(firstCells(table, 1));
 	return tail.length >= 2 && tail.length === below.size && tail.every((cell) => below.has(cell));
 }
 
 /** The corner is empty or a word that is no species; without one the header is a cell shorter than the rows below. */
-function hasCorner(head: readonly string[], rest: readonly CellRow[]): boolean {
+function hasCorner(head: readonly string[], table: CellTable): boolean {
 	const corner = head[0] ?? '';
 	if (corner === '') return true;
-	const width = rest.reduce((widest, { cells }) => Math.max(widest, cells.length), 0);
-	return head.length !== width - 1 && !rest.some(({ cells }) => cells[0] === corner);
+	return head.length !== bodyWidth(table) - 1 && !firstCells(table, 1).includes(corner);
 }
 
 function isNumbering(rowNames: readonly string[]): boolean {

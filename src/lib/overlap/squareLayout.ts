@@ -2,10 +2,10 @@ import { InputError } from '#lib/remarks/inputError.ts';
 import { remark, type Remark } from '#lib/remarks/remark.ts';
 import { alignNames, type NameAlignment } from './alignNames.ts';
 import { isMissing, isWord } from './cellNumber.ts';
+import { cellAt, cellPlace, cellText, rowCount, rowLength, type CellTable } from './cellTable.ts';
 import { listNames } from './listNames.ts';
 import { refuseRepeats, refuseTooMany, type TextEntries } from './matrixEntries.ts';
 import { plainName } from './plainName.ts';
-import type { CellRow } from './readCells.ts';
 import { squareHeader, type SquareHeader } from './squareHeader.ts';
 
 export type SquareLayout = { readonly entries: TextEntries; readonly remarks: readonly Remark[] };
@@ -17,14 +17,14 @@ export type SquareLayout = { readonly entries: TextEntries; readonly remarks: re
  * @throws {InputError} `not-a-number` for a table of words, `duplicate-species`, `unnamed-species`, `names-differ`,
  * `ragged-rows`, `too-many-species`
  */
-export function squareEntries(rows: readonly CellRow[]): SquareLayout {
-	refuseTooMany(rows.length - 1);
-	const header = squareHeader(rows);
+export function squareEntries(table: CellTable): SquareLayout {
+	refuseTooMany(rowCount(table) - 1);
+	const header = squareHeader(table);
 	refuseWords(header);
 	const rowNames = header.rowNames.map(plainName);
 	const columnNames = (header.columnNames ?? header.rowNames).map(plainName);
 	refuseTooMany(Math.max(rowNames.length, columnNames.length));
-	if (!header.namedByHeader) refuseRepeats(rowNames, (index) => `line ${header.body[index]?.line ?? 0}`);
+	if (!header.namedByHeader) refuseRepeats(rowNames, (index) => `line ${table.lines[header.bodyStart + index] ?? 0}`);
 	refuseRepeats(columnNames, (index) => `column ${index + 1 + header.firstNamed}`);
 
 	refuseRagged(header, columnNames);
@@ -34,56 +34,63 @@ export function squareEntries(rows: readonly CellRow[]): SquareLayout {
 	return { entries, remarks: layoutRemarks(header, alignment) };
 }
 
-function collectCells({ body, skip }: SquareHeader, alignment: NameAlignment): TextEntries {
+function collectCells({ table, bodyStart, skip }: SquareHeader, alignment: NameAlignment): TextEntries {
 	// Typed arrays of the largest size: four million cells pushed one by one take seconds.
-	const most = body.reduce((sum, { cells }) => sum + cells.length, 0);
-	const [from, to, line, column] = [new Int32Array(most), new Int32Array(most), new Int32Array(most), new Int32Array(most)];
-	const text: string[] = [];
-	for (const [i, row] of body.entries()) {
-		for (let cell = skip; cell < row.cells.length; cell++) {
-			const content = row.cells[cell] ?? '';
-			if (isMissing(content)) continue;
-			const k = text.push(content) - 1;
-			from[k] = alignment.rowSpecies[i] ?? -1;
-			to[k] = alignment.columnSpecies[cell - skip] ?? -1;
-			line[k] = row.line;
-			column[k] = cell + 1;
+	const most = table.starts.length;
+	const [from, to, cells] = [new Int32Array(most), new Int32Array(most), new Int32Array(most)];
+	let count = 0;
+	for (let row = bodyStart; row < rowCount(table); row++) {
+		const first = table.firstCells[row] ?? 0;
+		for (let cell = skip; cell < rowLength(table, row); cell++) {
+			if (isMissing(cellText(table, first + cell))) continue;
+			from[count] = alignment.rowSpecies[row - bodyStart] ?? -1;
+			to[count] = alignment.columnSpecies[cell - skip] ?? -1;
+			cells[count] = first + cell;
+			count += 1;
 		}
 	}
-	return { species: alignment.species, from, to, line, column, text };
+	return { species: alignment.species, from, to, source: { table, cells: cells.subarray(0, count) } };
 }
 
 /** A table of words is a trait table or another sheet: say so instead of naming one cell of many. */
-function refuseWords(header: SquareHeader): void {
-	let first: { line: number; column: number; text: string } | undefined;
+function refuseWords({ table, bodyStart, skip }: SquareHeader): void {
+	let first = -1;
 	let words = 0;
 	let numbers = 0;
-	for (const { line, cells } of header.body) {
-		for (let cell = header.skip; cell < cells.length; cell++) {
-			const text = cells[cell] ?? '';
+	for (let row = bodyStart; row < rowCount(table); row++) {
+		const start = table.firstCells[row] ?? 0;
+		for (let cell = skip; cell < rowLength(table, row); cell++) {
+			const text = cellText(table, start + cell);
 			if (isMissing(text)) continue;
 			if (!isWord(text)) numbers += 1;
 			else {
 				words += 1;
-				first ??= { line, column: cell + 1, text };
+				if (first === -1) first = start + cell;
 			}
 		}
 	}
-	if (first === undefined || words <= numbers) return;
-	const { line, column, text } = first;
+	if (first === -1 || words <= numbers) return;
+	const { line, column } = cellPlace(table, first);
 	const count = numbers === 0 ? 'no cell is one' : `${words} of ${words + numbers} cells are words`;
-	const message = `Expected numbers between species; ${count} (the first, line ${line}, column ${column}, reads “${text}”). Is this a table of traits? Bring the overlaps.`;
+	const message = `Expected numbers between species; ${count} (the first, line ${line}, column ${column}, reads “${cellText(table, first)}”). Is this a table of traits? Bring the overlaps.`;
 	throw new InputError('not-a-number', message, { line, column });
 }
 
 /** Rows are as long as the header. Only a lower half, with nothing beyond its diagonal, may end its rows early. */
-function refuseRagged({ body, skip, rowNames, columnNames: header }: SquareHeader, columnNames: readonly string[]): void {
+function refuseRagged(
+	{ table, bodyStart, skip, rowNames, columnNames: header }: SquareHeader,
+	columnNames: readonly string[]
+): void {
 	const position = new Map(columnNames.map((name, index) => [name, index]));
 	const width = columnNames.length;
 	const diagonals = rowNames.map((name) => position.get(plainName(name)) ?? width);
-	const isLower = body.every(({ cells }, i) => cells.slice(skip + (diagonals[i] ?? width) + 1).every(isMissing));
-	for (const { line, cells } of body) {
-		const got = cells.length - skip;
+	const isBlankFrom = (row: number, start: number) => {
+		for (let cell = start; cell < rowLength(table, row); cell++) if (!isMissing(cellAt(table, row, cell))) return false;
+		return true;
+	};
+	const isLower = diagonals.every((diagonal, i) => isBlankFrom(bodyStart + i, skip + diagonal + 1));
+	for (let row = bodyStart; row < rowCount(table); row++) {
+		const [line, got] = [table.lines[row] ?? 0, rowLength(table, row) - skip];
 		if (got === width || (isLower && got < width)) continue;
 		const versus = header === undefined ? `there are ${width} rows` : `the header names ${width} species`;
 		const hint = got > width ? ' If the numbers have decimal commas, separate the cells by semicolons or tabs.' : '';
@@ -97,9 +104,9 @@ function refuseRagged({ body, skip, rowNames, columnNames: header }: SquareHeade
  */
 function refuseStrangers({ onlyRows, onlyColumns, species }: NameAlignment, entries: TextEntries): void {
 	if (onlyRows.length + onlyColumns.length === 0) return;
-	const half =
-		onlyRows.length <= 1 && onlyColumns.length <= 1 && entries.text.length <= (species.length * (species.length - 1)) / 2;
-	if (half && entries.text.every((_, k) => entries.from[k] !== entries.to[k])) return;
+	const { cells } = entries.source;
+	const half = onlyRows.length <= 1 && onlyColumns.length <= 1 && cells.length <= (species.length * (species.length - 1)) / 2;
+	if (half && cells.every((_, k) => entries.from[k] !== entries.to[k])) return;
 	if (onlyRows.length + onlyColumns.length === species.length) {
 		const message = `Expected rows and columns to name the same species; they share none (rows ${listNames(onlyRows, 3)}; columns ${listNames(onlyColumns, 3)}). Is this a table of sites or traits? Bring the overlaps.`;
 		throw new InputError('names-differ', message);
