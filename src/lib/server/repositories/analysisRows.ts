@@ -1,4 +1,5 @@
 import { getTableColumns, sql } from 'drizzle-orm';
+import type { HeadlineFigures } from '#lib/analysis/words/headlineWords.ts';
 import type { AnalysisProgress, AnalysisResult, FindingKind } from '#lib/contracts/analysisResult.ts';
 import type { AnalysisStatus } from '#lib/contracts/materials.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
@@ -32,10 +33,8 @@ export type ListedAnalysis = {
 	readonly deletedAt: string | null;
 };
 
-export type Headline = {
+export type Headline = HeadlineFigures & {
 	readonly species: number;
-	readonly slope: number;
-	readonly p: number;
 	readonly kind: FindingKind;
 	readonly title: string;
 };
@@ -56,6 +55,9 @@ export const listedColumns = {
 		'species', ${analyses.result}->'species',
 		'slope', ${analyses.result}->'regression'->'slope',
 		'p', ${analyses.result}->'permutation'->'p',
+		'exact', ${analyses.result}->'permutation'->'exact',
+		'count', ${analyses.result}->'permutation'->'count',
+		'within', ${analyses.result}->'permutation'->'withinDeepestSplit',
 		'kind', ${analyses.result}->'finding'->'kind',
 		'title', ${analyses.result}->'finding'->'title'
 	) end`

@@ -1,3 +1,4 @@
+import { headlineWords } from '#lib/analysis/words/headlineWords.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Access } from '#lib/server/access.ts';
@@ -96,10 +97,10 @@ async function analysisLine(access: Access, listed: analyses.ListedAnalysis) {
 	return {
 		id,
 		status,
-		headline,
+		title: headline?.title ?? null,
+		figures:
+			headline === null ? null : headlineWords(headline, { alternative: plan.alternative, ageUnit: tree?.ageUnit ?? 'Ma' }),
 		failure: failure?.message ?? null,
-		floor: 1 / (plan.permutations + 1),
-		ageUnit: tree?.ageUnit ?? 'Ma',
 		at: finishedAt ?? createdAt,
 		isOutOfDate: status === 'finished' && (await analyses.outOfDate(access, listed)).length > 0
 	};

@@ -1,3 +1,4 @@
+import { headlineWords } from '#lib/analysis/words/headlineWords.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
@@ -31,6 +32,8 @@ async function analysisLine(access: Access, listed: analyses.ListedAnalysis) {
 	const run = await overlapRuns.findListed(access, listed.overlapRunId);
 	return {
 		...{ id, status, headline, plan, declaredAt, hash, failure: failure?.message ?? null },
+		figures:
+			headline === null ? null : headlineWords(headline, { alternative: plan.alternative, ageUnit: tree?.ageUnit ?? 'Ma' }),
 		isDeclaredOnly: status === 'stopped' && startedAt === null && declaredAt !== null,
 		at: finishedAt ?? createdAt,
 		tree: { label: tree?.label ?? 'a tree', treeCount: tree?.treeCount ?? 1, ageUnit: tree?.ageUnit ?? ('Ma' as const) },

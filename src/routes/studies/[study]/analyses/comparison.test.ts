@@ -8,7 +8,7 @@ const one: Compared = {
 	plan,
 	tree: { label: 'summary tree', treeCount: 1, ageUnit: 'Ma' },
 	run: { label: 'D', measure: 'schoener-d' },
-	headline: { title: 'Overlap falls', slope: -0.0163, p: 0.0016, species: 26 }
+	headline: { title: 'Overlap falls', slope: -0.0163, p: 0.0016, exact: false, count: 9999, within: null, species: 26 }
 };
 
 describe('comparison', () => {
@@ -20,7 +20,14 @@ describe('comparison', () => {
 	it('marks the settings and the findings that differ', () => {
 		const other: Compared = { ...one, id: 'b', plan: { ...plan, seed: 2 }, headline: null };
 		const differing = comparison(one, other).rows.filter(({ differs }) => differs);
-		expect(differing.map(({ term }) => term)).toEqual(['Seed', 'Finding', 'Slope', 'p', 'Species used']);
+		expect(differing.map(({ term }) => term)).toEqual([
+			'Seed',
+			'Finding',
+			'Slope',
+			'p',
+			'p within the deepest split',
+			'Species used'
+		]);
 		expect(differing[0]?.facts).toEqual(['1', '2']);
 	});
 

@@ -1,5 +1,5 @@
-import { formatCount, formatP, formatSlope } from '#lib/analysis/words/numbers.ts';
-import { unitWords } from '#lib/analysis/words/units.ts';
+import { headlineWords, type HeadlineFigures } from '#lib/analysis/words/headlineWords.ts';
+import { formatCount } from '#lib/analysis/words/numbers.ts';
 import type { AgeUnit } from '#lib/contracts/materials.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
@@ -11,7 +11,7 @@ export type Compared = {
 	readonly plan: Plan;
 	readonly tree: { readonly label: string; readonly treeCount: number; readonly ageUnit: AgeUnit };
 	readonly run: { readonly label: string; readonly measure: Measure };
-	readonly headline: { readonly title: string; readonly slope: number; readonly p: number; readonly species: number } | null;
+	readonly headline: (HeadlineFigures & { readonly title: string; readonly species: number }) | null;
 };
 
 export type ComparisonRow = { readonly term: string; readonly facts: readonly [string, string]; readonly differs: boolean };
@@ -39,14 +39,17 @@ const TERMS: readonly { readonly term: string; readonly fact: (one: Compared) =>
 	{ term: 'Shuffles', fact: ({ plan }) => formatCount(plan.permutations) },
 	{ term: 'Seed', fact: ({ plan }) => String(plan.seed) },
 	{ term: 'Finding', fact: ({ headline }) => headline?.title ?? NOTHING },
-	{ term: 'Slope', fact: ({ headline, tree }) => (headline === null ? NOTHING : slopeWords(headline.slope, tree.ageUnit)) },
-	{
-		term: 'p',
-		fact: ({ headline, plan }) => (headline === null ? NOTHING : `p ${formatP(headline.p, 1 / (plan.permutations + 1))}`)
-	},
+	{ term: 'Slope', fact: (one) => figuresOf(one)?.slope ?? NOTHING },
+	{ term: 'p', fact: (one) => withSign(figuresOf(one)?.p) },
+	{ term: 'p within the deepest split', fact: (one) => withSign(figuresOf(one)?.within) },
 	{ term: 'Species used', fact: ({ headline }) => (headline === null ? NOTHING : formatCount(headline.species)) }
 ];
 
-function slopeWords(slope: number, unit: AgeUnit): string {
-	return `${formatSlope(slope)} ${unitWords(unit).per}`;
+function figuresOf({ headline, plan, tree }: Compared) {
+	return headline === null ? null : headlineWords(headline, { alternative: plan.alternative, ageUnit: tree.ageUnit });
+}
+
+function withSign(p: string | undefined): string {
+	if (p === undefined) return NOTHING;
+	return /^[=≤]/.test(p) ? `p ${p}` : p;
 }
