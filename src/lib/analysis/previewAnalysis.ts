@@ -7,14 +7,17 @@ import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
 import { isExact } from '#lib/statistics/permutationTest.ts';
 import { smallestFreeP } from './attainable.ts';
+import { nicheTraits } from './nicheTraits.ts';
 import { prepareAnalysis } from './prepareAnalysis.ts';
 
 /**
  * What an analysis would use and could at best say, without running it.
- * @throws {InputError} as `prepareAnalysis` and `preparePermutation`: exactly what would stop the analysis itself
+ * @throws {InputError} as `prepareAnalysis`, `preparePermutation` and `nicheTraits`: exactly what would stop the analysis itself
  */
 export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPreview {
-	const { tree, ages, species, response, dropped, remarks } = prepareAnalysis(inputs, plan);
+	const prepared = prepareAnalysis(inputs, plan);
+	const { tree, ages, species, response, dropped, remarks } = prepared;
+	nicheTraits(prepared, inputs, plan);
 	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
 	const exact = isExact(design, false, plan.permutations);
 	const sides = plan.alternative === 'two-sided' ? 2 : 1;

@@ -1,3 +1,4 @@
+import type { NicheTable } from '#lib/overlap/nicheTable.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
@@ -21,6 +22,8 @@ export type AnalysisInputs = {
 		readonly remarks: readonly Remark[];
 	};
 	readonly decisions: readonly { readonly from: string; readonly to: string | null; readonly why?: string }[];
+	/** niche positions and what goes with them, when the plan asks for their signal */
+	readonly niches?: { readonly label: string } & Pick<NicheTable, 'species' | 'variables'>;
 };
 
 /** What is known of one tree of a set without its whole structure. */

@@ -30,7 +30,11 @@ export const planRequestSchema = z.strictObject({
 		.nullable()
 		.default(null),
 	signal: z
-		.strictObject({ variables: z.array(z.string()) })
+		.strictObject({
+			variables: z.array(z.string()).min(1).max(100),
+			/** id of a niche table of the study; the newest when not given */
+			table: id.optional()
+		})
 		.nullable()
 		.default(null),
 	robustness: z.strictObject({}).loose().nullable().default(null)

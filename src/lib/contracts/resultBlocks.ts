@@ -173,7 +173,9 @@ const modelSchema = z.object({
 	aicc: z.number().nullable(),
 	weight: z.number().nullable(),
 	/** λ, the half-life in the unit of the tree, or the rate of change; null for the others */
-	estimate: z.number().nullable()
+	estimate: z.number().nullable(),
+	/** the search ran into its end: here no different from a simpler model */
+	atBound: z.boolean()
 });
 
 export const signalVariableSchema = z.object({
@@ -187,6 +189,9 @@ export const signalVariableSchema = z.object({
 		/** species shuffled: more signal than none */
 		p: probability,
 		exact: z.boolean(),
+		/** arrangements of the species, or shuffles */
+		count: z.number().int(),
+		/** Holm's adjustment over the niche positions of the plan; p itself for the others */
 		pAdjusted: probability,
 		/** simulated random walks: more alike than a random walk, upper tail */
 		pAboveRandomWalk: probability

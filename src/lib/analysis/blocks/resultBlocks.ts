@@ -1,5 +1,6 @@
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { BlockContext } from './blockContext.ts';
+import { signalBlock } from './signalBlock.ts';
 
 /** The parts of a result beyond the test itself: each is there when the plan asks for it or the data allow it. */
 export type ResultBlocks = Partial<AnalysisResult>;
@@ -7,7 +8,7 @@ export type ResultBlocks = Partial<AnalysisResult>;
 type Block = (context: BlockContext) => ResultBlocks;
 
 /** One entry a block, in the order of the findings page. A block that was not asked for returns an empty object. */
-const BLOCKS: readonly Block[] = [];
+const BLOCKS: readonly Block[] = [signalBlock];
 
 export function resultBlocks(context: BlockContext): ResultBlocks {
 	return Object.assign({}, ...BLOCKS.map((block) => block(context)));
