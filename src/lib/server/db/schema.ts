@@ -18,6 +18,8 @@ import type { CovariateReadingNotes } from '#lib/contracts/covariates.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import type { PlanContext } from '#lib/contracts/planContext.ts';
+import type { StoredNicheVariable } from '#lib/contracts/nicheTables.ts';
+import type { TreeAbout } from '#lib/contracts/treeAbout.ts';
 import type { FigureSettings } from '#lib/contracts/report.ts';
 import type { Role } from '#lib/contracts/user.ts';
 import type { AgeUnit, AnalysisStatus, TreeSetKind } from '#lib/contracts/materials.ts';
@@ -145,6 +147,8 @@ export const treeSets = pgTable(
 		remarks: jsonb('remarks').$type<Remark[]>().notNull(),
 		/** the person said: extend terminal branches so that all tips end together */
 		spreadConfirmed: boolean('spread_confirmed').notNull().default(false),
+		/** what only its author knows; null when nobody has said anything */
+		about: jsonb('about').$type<TreeAbout>(),
 		/** the material this one replaces */
 		replaces: text('replaces'),
 		createdBy: text('created_by')
@@ -210,6 +214,31 @@ export const covariates = pgTable(
 		deletedAt: deletedAt()
 	},
 	(table) => [index('covariates_study').on(table.studyId)]
+);
+
+/** Niche positions of species, and what goes with them, such as breadth and number of records. */
+export const nicheTables = pgTable(
+	'niche_tables',
+	{
+		id: id(),
+		studyId: text('study_id')
+			.notNull()
+			.references(() => studies.id, { onDelete: 'cascade' }),
+		label: text('label').notNull(),
+		textHash: text('text_hash')
+			.notNull()
+			.references(() => texts.hash),
+		species: jsonb('species').$type<string[]>().notNull(),
+		variables: jsonb('variables').$type<StoredNicheVariable[]>().notNull(),
+		remarks: jsonb('remarks').$type<Remark[]>().notNull(),
+		replaces: text('replaces'),
+		createdBy: text('created_by')
+			.notNull()
+			.references(() => users.id),
+		createdAt: createdAt(),
+		deletedAt: deletedAt()
+	},
+	(table) => [index('niche_tables_study').on(table.studyId)]
 );
 
 /** One row per name in the data; the newest wins, older ones stay as history. */

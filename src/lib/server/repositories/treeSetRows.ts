@@ -1,4 +1,5 @@
 import type { AgeUnit, TreeSetKind } from '#lib/contracts/materials.ts';
+import type { TreeAbout } from '#lib/contracts/treeAbout.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { treeSets } from '#lib/server/db/schema.ts';
 
@@ -22,6 +23,8 @@ export type TreeSet = {
 	readonly remarks: readonly Remark[];
 	readonly spreadConfirmed: boolean;
 	readonly chosen: ChosenTrees;
+	/** what only its author knows; null when nobody has said anything */
+	readonly about: TreeAbout | null;
 	readonly replaces: string | null;
 	readonly createdBy: string;
 	readonly createdAt: string;
