@@ -2,7 +2,7 @@ import { identityArrangement } from '../arrangements.ts';
 import type { SharedNull } from '../multiplicity/minimumP.ts';
 import { plannedArrangements, type ShuffleBatch, shuffleBatches } from '../shuffleBatches.ts';
 import type { SpeciesGroup } from './cladeList.ts';
-import { rowSums } from './directSums.ts';
+import { memberRows, rowSums } from './memberRows.ts';
 import type { WithinSums } from './withinSums.ts';
 
 /** Share of the mean magnitudes within which two differences are one: far above rounding, far below a step of real data. */
@@ -36,64 +36,59 @@ export function contrastNulls(question: ContrastQuestion): ContrastNulls {
 	const shuffled = { tipCount: count, groups: [{ from: 0, to: count }], domain, seed, permutations };
 	const planned = plannedArrangements(shuffled);
 	const values = groups.map(() => new Float64Array(planned.count));
-	const write = contrastWriter(question, matrix);
+	const sums = contrastSums(question, matrix);
 	for (const batch of shuffleBatches(shuffled)) {
 		onBatch?.();
-		write(batch, values, batch.first);
+		const { within, rows } = sums(batch);
+		for (const [g, into] of values.entries()) {
+			const { ofWithin, ofRows } = contrastWeights(groups[g], count);
+			for (let drawn = 0, at = g; drawn < batch.count; drawn++, at += groups.length) {
+				into[batch.first + drawn] = ofWithin * (within[at] ?? 0) + ofRows * (rows[at] ?? 0);
+			}
+		}
 	}
-	const [observed, magnitudes] = [matrix, matrix.map(Math.abs)].map((each) => observedContrasts(question, each));
+	const ties = tiesOf(question);
+	const observed = observedOf(question);
 	const nulls = groups.map((_, g) => ({
-		observed: observed?.[g]?.difference ?? Number.NaN,
+		observed: observed[g] ?? 0,
 		values: values[g] ?? new Float64Array(0),
-		tie: TIE_SHARE * (magnitudes?.[g]?.total ?? 0)
+		tie: ties[g] ?? 0
 	}));
 	return { ...planned, nulls };
 }
 
-type Contrast = { readonly difference: number; readonly total: number };
+type Sums = { readonly within: Float64Array; readonly rows: Float64Array };
 
-/** By the same sums as every shuffle, so that the identity ties with itself. */
-function observedContrasts(question: ContrastQuestion, matrix: Float64Array): Contrast[] {
-	const { count, groups } = question;
-	const batch: ShuffleBatch = { first: 0, count: 1, arrangements: identityArrangement(count) };
-	const within = question.withinSums(matrix)(batch);
-	const rows = memberRows(groups, batch.arrangements, rowSums(matrix, count));
-	return groups.map((group, g) => contrast(group, count, { within: within[g] ?? 0, rows: rows[g] ?? 0 }));
+function contrastSums({ groups, count, withinSums }: ContrastQuestion, matrix: Float64Array): (batch: ShuffleBatch) => Sums {
+	const within = withinSums(matrix);
+	const rows = memberRows(groups, rowSums(matrix, count));
+	return (batch) => ({ within: within(batch), rows: rows(batch) });
 }
 
-type Writer = (batch: ShuffleBatch, values: readonly Float64Array[], first: number) => void;
-
-function contrastWriter({ count, groups, withinSums }: ContrastQuestion, matrix: Float64Array): Writer {
-	const sums = withinSums(matrix);
-	const rows = rowSums(matrix, count);
-	return (batch, values, first) => {
-		const within = sums(batch);
-		for (let drawn = 0; drawn < batch.count; drawn++) {
-			const arrangement = batch.arrangements.subarray(drawn * count, (drawn + 1) * count);
-			const ofMembers = memberRows(groups, arrangement, rows);
-			for (const [g, group] of groups.entries()) {
-				const sum = { within: within[drawn * groups.length + g] ?? 0, rows: ofMembers[g] ?? 0 };
-				const into = values[g];
-				if (into) into[first + drawn] = contrast(group, count, sum).difference;
-			}
-		}
-	};
-}
-
-function contrast({ members }: SpeciesGroup, count: number, { within, rows }: { within: number; rows: number }): Contrast {
-	const meanWithin = within / ((members.length * (members.length - 1)) / 2);
-	const meanBetween = (rows - 2 * within) / (members.length * (count - members.length));
-	return { difference: meanWithin - meanBetween, total: meanWithin + meanBetween };
-}
-
-/** Row sums of the members of each group: of neighbours from running totals, of others one by one. */
-function memberRows(groups: readonly SpeciesGroup[], arrangement: Int32Array, rows: Float64Array): Float64Array {
-	const running = new Float64Array(arrangement.length + 1);
-	for (let i = 0; i < arrangement.length; i++) running[i + 1] = (running[i] ?? 0) + (rows[arrangement[i] ?? 0] ?? 0);
-	return Float64Array.from(groups, ({ members }) => {
-		const from = members[0] ?? 0;
-		const to = from + members.length;
-		if (members.at(-1) === to - 1) return (running[to] ?? 0) - (running[from] ?? 0);
-		return members.reduce((sum, position) => sum + (rows[arrangement[position] ?? 0] ?? 0), 0);
+/** The observed differences, by the same sums as every shuffle, so that the identity ties with itself. */
+function observedOf(question: ContrastQuestion): number[] {
+	const { within, rows } = contrastSums(question, question.matrix)(identityBatch(question.count));
+	return question.groups.map((group, g) => {
+		const { ofWithin, ofRows } = contrastWeights(group, question.count);
+		return ofWithin * (within[g] ?? 0) + ofRows * (rows[g] ?? 0);
 	});
+}
+
+function tiesOf(question: ContrastQuestion): number[] {
+	const { within, rows } = contrastSums(question, question.matrix.map(Math.abs))(identityBatch(question.count));
+	return question.groups.map((group, g) => {
+		const { ofWithin, ofRows } = contrastWeights(group, question.count);
+		return TIE_SHARE * (ofWithin * (within[g] ?? 0) - ofRows * (rows[g] ?? 0));
+	});
+}
+
+function identityBatch(count: number): ShuffleBatch {
+	return { first: 0, count: 1, arrangements: identityArrangement(count) };
+}
+
+/** Mean within less mean between as weights of the sum within and of the members' row sums, rows = between + 2 within. */
+function contrastWeights(group: SpeciesGroup | undefined, count: number): { ofWithin: number; ofRows: number } {
+	const size = group?.members.length ?? 0;
+	const between = size * (count - size);
+	return { ofWithin: 2 / (size * (size - 1)) + 2 / between, ofRows: -1 / between };
 }

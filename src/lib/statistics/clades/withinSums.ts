@@ -1,5 +1,5 @@
 import type { TreeShape } from '../agedTree.ts';
-import { type BlockInput, emptyBlockSums, interleave, sumBlocksInPlace } from '../blockSums.ts';
+import { nodeSumsOfBatch } from '../nodeSums.ts';
 import { pairBlocks } from '../pairBlocks.ts';
 import type { ShuffleBatch } from '../shuffleBatches.ts';
 import type { SpeciesGroup } from './cladeList.ts';
@@ -14,23 +14,19 @@ export type WithinSums = (batch: ShuffleBatch) => Float64Array;
  * @param matrix - shape (n, n), row-major, symmetric
  */
 export function cladeWithinSums(shape: TreeShape, clades: readonly SpeciesGroup[], matrix: Float64Array): WithinSums {
-	const input: BlockInput = {
-		layout: pairBlocks(shape),
-		cells: interleave(matrix, new Float64Array(matrix.length)),
-		tipCount: shape.tips.length
-	};
+	const input = { layout: pairBlocks(shape), overlap: matrix, tipCount: shape.tips.length };
 	const slotOf = new Map(Array.from(shape.internal, (node, slot) => [node, slot]));
 	const above = new Int32Array(shape.internal.length);
 	for (const [node, slot] of slotOf) for (const child of shape.children[node] ?? []) above[slotOf.get(child) ?? 0] = slot;
 	const slots = Int32Array.from(clades, ({ node }) => slotOf.get(node ?? -1) ?? 0);
-	const sums = emptyBlockSums(shape.internal.length);
-	return ({ count, arrangements }) => {
-		const within = new Float64Array(count * slots.length);
-		for (let drawn = 0; drawn < count; drawn++) {
-			sumBlocksInPlace(sums, input, arrangements.subarray(drawn * input.tipCount, (drawn + 1) * input.tipCount));
-			raiseInPlace(sums.plain, above);
+	return (batch) => {
+		const { plain } = nodeSumsOfBatch(input, batch);
+		const within = new Float64Array(batch.count * slots.length);
+		for (let drawn = 0; drawn < batch.count; drawn++) {
+			const sums = plain.subarray(drawn * above.length, (drawn + 1) * above.length);
+			raiseInPlace(sums, above);
 			for (let clade = 0; clade < slots.length; clade++) {
-				within[drawn * slots.length + clade] = sums.plain[slots[clade] ?? 0] ?? 0;
+				within[drawn * slots.length + clade] = sums[slots[clade] ?? 0] ?? 0;
 			}
 		}
 		return within;
