@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { analysisResultSchema, progressSchema } from './analysisResult.ts';
 import { AGE_UNITS, ANALYSIS_STATUSES, TREE_SET_KINDS } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
+import { nicheVariableSchema } from './nicheTables.ts';
 import { planSchema } from './plan.ts';
 import { planContextSchema } from './planContext.ts';
 import { remarkSchema } from './remark.ts';
@@ -49,6 +50,7 @@ const listed = z.object({ id: z.string(), label: z.string(), createdAt: time });
 export const studyAnswerSchema = studySchema.extend({
 	treeSets: z.array(listed.extend({ treeCount: count, tipCount: count })),
 	overlapRuns: z.array(listed.extend({ measure: measureSchema, speciesCount: count })),
+	nicheTables: z.array(listed.extend({ variables: z.array(z.string()), speciesCount: count })),
 	analyses: z.array(z.object({ id: z.string(), status, createdAt: time })),
 	reports: z.array(z.object({ id: z.string(), title: z.string(), analysis: z.string(), createdAt: time }))
 });
@@ -117,6 +119,15 @@ export const overlapRunAnswerSchema = z.object({
 	}),
 	/** how the text was read */
 	reading: z.record(z.string(), z.unknown()),
+	remarks
+});
+
+export const nicheTableAnswerSchema = z.object({
+	id: z.string(),
+	label: z.string(),
+	species: z.array(z.string()),
+	/** values in the order of `species`; null where one is missing */
+	variables: z.array(nicheVariableSchema),
 	remarks
 });
 

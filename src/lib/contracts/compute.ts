@@ -1,3 +1,4 @@
+import type { NicheTableRequest } from './nicheTables.ts';
 import type { NicheTable } from '#lib/overlap/nicheTable.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
@@ -74,6 +75,7 @@ export type ComputeTasks = {
 	readTrees: { argument: { text: string; confirm?: Confirm }; answer: TreeReading };
 	/** either `csv` or `matrix` */
 	readMatrix: { argument: Pick<OverlapRunRequest, 'measure' | 'confirm' | 'csv' | 'matrix'>; answer: MatrixReading };
+	readNicheTable: { argument: Pick<NicheTableRequest, 'csv' | 'roles'>; answer: NicheTable };
 	treeStructure: { argument: { text: string; tree: number; spreadConfirmed: boolean }; answer: TreeStructure };
 	mrcaAges: {
 		argument: { text: string; tree: number; spreadConfirmed: boolean; species?: readonly string[] };

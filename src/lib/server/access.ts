@@ -23,6 +23,7 @@ export type AccessObject =
 	| { readonly study: string }
 	| { readonly treeSet: string }
 	| { readonly overlapRun: string }
+	| { readonly nicheTable: string }
 	| { readonly analysis: string }
 	| { readonly report: string }
 	| { readonly account: string };

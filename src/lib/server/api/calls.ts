@@ -5,6 +5,7 @@ import {
 	analysisStartedSchema,
 	analysisStatusSchema,
 	namesAnswerSchema,
+	nicheTableAnswerSchema,
 	overlapRunAnswerSchema,
 	overlapRunCreatedSchema,
 	plateQuerySchema,
@@ -25,6 +26,7 @@ import {
 	tokenRequestSchema,
 	treeSetRequestSchema
 } from '#lib/contracts/materials.ts';
+import { nicheTableRequestSchema } from '#lib/contracts/nicheTables.ts';
 import { planRequestSchema } from '#lib/contracts/plan.ts';
 import { reportRequestSchema } from '#lib/contracts/report.ts';
 
@@ -133,6 +135,23 @@ export const CALLS: readonly Call[] = [
 		id: 'findOverlapRun',
 		does: 'A run with its values, as similarities.',
 		answers: [{ status: 200, means: 'The run', content: json(overlapRunAnswerSchema) }]
+	},
+	{
+		method: 'post',
+		path: '/studies/{study}/niche-tables',
+		id: 'createNicheTable',
+		does: 'Reads and keeps a table of niche positions: one row a species, one column a variable, `x_se` for the standard errors of `x`.',
+		needsToken: true,
+		body: nicheTableRequestSchema,
+		answers: [{ status: 201, means: 'Kept, with what was noticed', content: json(nicheTableAnswerSchema) }],
+		refusals: [400, 413, 422]
+	},
+	{
+		...reading,
+		path: '/niche-tables/{nicheTable}',
+		id: 'findNicheTable',
+		does: 'A table of niche positions with its values.',
+		answers: [{ status: 200, means: 'The table', content: json(nicheTableAnswerSchema) }]
 	},
 	{
 		...reading,

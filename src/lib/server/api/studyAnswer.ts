@@ -2,6 +2,7 @@ import type { StudyAnswer, studyAnswerSchema } from '#lib/contracts/answers.ts';
 import type { z } from 'zod';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
 import type { Study } from '#lib/server/repositories/studies.ts';
@@ -28,6 +29,13 @@ export async function listedParts(access: Access): Promise<Parts> {
 			label,
 			createdAt,
 			measure,
+			speciesCount: species.length
+		})),
+		nicheTables: (await nicheTables.list(access)).map(({ id, label, createdAt, variables, species }) => ({
+			id,
+			label,
+			createdAt,
+			variables: variables.map(({ name }) => name),
 			speciesCount: species.length
 		})),
 		analyses: (await analyses.list(access)).map(({ id, status, createdAt }) => ({ id, status, createdAt })),
