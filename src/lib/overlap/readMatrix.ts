@@ -5,7 +5,7 @@ import { isPairList, pairEntries } from './pairLayout.ts';
 import { readCells } from './readCells.ts';
 import { readNumbers } from './readNumbers.ts';
 import { readText } from './readText.ts';
-import { settleMatrix } from './settleMatrix.ts';
+import { settleMatrix, type Layout } from './settleMatrix.ts';
 import { squareEntries } from './squareLayout.ts';
 
 /**
@@ -22,17 +22,29 @@ import { squareEntries } from './squareLayout.ts';
  * `squareLayout`, `pairLayout`, `readNumbers`, `settleMatrix`
  */
 export function readMatrix(source: string | Uint8Array, options: MatrixOptions): MatrixReading {
+	const { entries, layout, ...told } = matrixEntries(source);
+	const settled = settleMatrix(entries, layout, options);
+	return { ...settled, separator: told.separator, decimal: told.decimal, remarks: [...told.remarks, ...settled.remarks] };
+}
+
+export type EnteredMatrix = Pick<MatrixReading, 'separator' | 'decimal' | 'remarks'> & {
+	readonly entries: MatrixEntries;
+	readonly layout: Layout;
+};
+
+/** The numbers of a species-by-species table by their two species, as they arrived: nothing about them judged yet. */
+export function matrixEntries(source: string | Uint8Array): EnteredMatrix {
 	const decoded = readText(source);
 	const table = readCells(decoded.text);
 	const isList = isPairList(table);
 	const layout = isList ? pairEntries(table) : { ...squareEntries(table), valueHeader: '' };
-	const numbers = readNumbers(layout.entries);
-	const settled = settleMatrix(numbers.entries, { isPairList: isList, valueHeader: layout.valueHeader }, options);
+	const { entries, decimal } = readNumbers(layout.entries);
 	return {
-		...settled,
+		entries,
+		layout: { isPairList: isList, valueHeader: layout.valueHeader },
 		separator: table.separator,
-		decimal: numbers.decimal,
-		remarks: [...decoded.remarks, ...layout.remarks, ...settled.remarks]
+		decimal,
+		remarks: [...decoded.remarks, ...layout.remarks]
 	};
 }
 
@@ -45,13 +57,18 @@ export type MatrixBody = { readonly species: readonly string[]; readonly values:
  * @throws {InputError} `ragged-rows` unless `values` is square, `not-a-number` on infinity or NaN, `duplicate-species`,
  * `unnamed-species`, `too-many-species`, and all of `settleMatrix`
  */
-export function matrixFromBody({ species, values }: MatrixBody, options: MatrixOptions): MatrixReading {
+export function matrixFromBody(body: MatrixBody, options: MatrixOptions): MatrixReading {
+	const settled = settleMatrix(bodyEntries(body), { isPairList: false, valueHeader: '' }, options);
+	return { ...settled, separator: null, decimal: null };
+}
+
+/** The same as `matrixEntries` for a matrix that comes as numbers. */
+export function bodyEntries({ species, values }: MatrixBody): MatrixEntries {
 	refuseTooMany(species.length);
 	const names = species.map((name) => name.trim());
 	refuseRepeats(names, (index) => `position ${index + 1} of the species`);
 	refuseUnsquare(names, values);
-	const settled = settleMatrix(bodyEntries(names, values), { isPairList: false, valueHeader: '' }, options);
-	return { ...settled, separator: null, decimal: null };
+	return collectBody(names, values);
 }
 
 function refuseUnsquare(names: readonly string[], values: MatrixBody['values']): void {
@@ -66,7 +83,7 @@ function refuseUnsquare(names: readonly string[], values: MatrixBody['values']):
 	}
 }
 
-function bodyEntries(species: readonly string[], values: MatrixBody['values']): MatrixEntries {
+function collectBody(species: readonly string[], values: MatrixBody['values']): MatrixEntries {
 	const most = species.length ** 2;
 	const [from, to, kept] = [new Int32Array(most), new Int32Array(most), new Float64Array(most)];
 	let count = 0;
