@@ -1,6 +1,6 @@
 import type { AgedTree } from '../agedTree.ts';
 import { quantiles } from '../quantiles.ts';
-import { layTree, type LaidTree } from './posteriorTree.ts';
+import { layTreeInPlace, type LaidTree, roomForTree } from './posteriorTree.ts';
 
 /** How a clade of the displayed tree fares in the set. */
 export type CladeAge = {
@@ -19,40 +19,45 @@ export type CladeCollector = {
 	readonly placeOf: ReadonlyMap<number, number>;
 	readonly ages: readonly number[][];
 	readonly rowCount: number;
+	/** shape (nodes,) each; lowest and highest row below each node of the tree being read */
+	readonly lowest: Int32Array;
+	readonly highest: Int32Array;
 };
 
 /** The rows of the matrix stand in the order of the displayed tree, so each of its clades is a run of rows. */
-export function cladeCollector(displayed: AgedTree): CladeCollector {
-	const rowCount = tipCountOf(displayed);
-	const { internal, tipFrom, tipTo } = layTree({ ...displayed, rows: Int32Array.from({ length: rowCount }, (_, row) => row) });
+export function cladeCollector(displayed: AgedTree, rowCount: number): CladeCollector {
+	const laid = roomForTree(rowCount);
+	layTreeInPlace(laid, { ...displayed, rows: Int32Array.from({ length: rowCount }, (_, row) => row) });
+	const nodes = laid.nodeOf.slice(0, laid.internalCount);
+	const { tipFrom, tipTo } = laid;
 	const placeOf = new Map(
-		Array.from(internal, (node, place) => [(tipFrom[node] ?? 0) * (rowCount + 1) + (tipTo[node] ?? 0), place])
+		Array.from(nodes, (node, place) => [(tipFrom[node] ?? 0) * (rowCount + 1) + (tipTo[node] ?? 0), place])
 	);
-	return { nodes: internal, placeOf, ages: Array.from(internal, () => []), rowCount };
+	return { nodes, placeOf, ages: Array.from(nodes, () => []), rowCount, lowest: tipFrom.slice(), highest: tipTo.slice() };
 }
 
 /** Adds the ages of the clades that a tree shares with the displayed one. Cost: its nodes. */
 export function collectCladesInPlace(
-	{ placeOf, ages, rowCount }: CladeCollector,
+	{ placeOf, ages, rowCount, lowest, highest }: CladeCollector,
 	{ tree, tipFrom, tipTo, slotOf }: LaidTree
 ): void {
 	const { parent, rows } = tree;
-	const lowest = new Int32Array(parent.length).fill(rowCount);
-	const highest = new Int32Array(parent.length).fill(-1);
+	lowest.fill(rowCount, 0, parent.length);
+	highest.fill(-1, 0, parent.length);
 	for (let node = parent.length - 1; node >= 0; node--) {
 		const tip = tipFrom[node] ?? 0;
-		if (slotOf[node] === -1) lowest[node] = highest[node] = rows[tip] ?? 0;
-		const low = lowest[node] ?? 0;
-		const high = highest[node] ?? 0;
+		const isTip = slotOf[node] === -1;
+		const low = isTip ? (rows[tip] ?? 0) : (lowest[node] ?? 0);
+		const high = isTip ? low : (highest[node] ?? 0);
 		// As many rows as tips between the lowest and the highest: the clade is a run of rows.
-		if (slotOf[node] !== -1 && high - low + 1 === (tipTo[node] ?? 0) - tip) {
+		if (!isTip && high - low + 1 === (tipTo[node] ?? 0) - tip) {
 			const place = placeOf.get(low * (rowCount + 1) + high + 1);
 			if (place !== undefined) ages[place]?.push(tree.ages[node] ?? 0);
 		}
 		const above = parent[node] ?? -1;
 		if (above < 0) continue;
-		lowest[above] = Math.min(lowest[above] ?? 0, low);
-		highest[above] = Math.max(highest[above] ?? 0, high);
+		if (low < (lowest[above] ?? 0)) lowest[above] = low;
+		if (high > (highest[above] ?? 0)) highest[above] = high;
 	}
 }
 
@@ -64,9 +69,4 @@ export function cladeAges({ nodes, ages }: CladeCollector, treeCount: number): C
 		const [low = 0, high = 0] = quantiles(Float64Array.from(held), [0.025, 0.975]).map(([, age]) => age);
 		return { node, share: held.length / treeCount, age: [low, high] };
 	});
-}
-
-function tipCountOf({ parent }: AgedTree): number {
-	const inner = new Set(parent);
-	return parent.filter((_, node) => !inner.has(node)).length;
 }

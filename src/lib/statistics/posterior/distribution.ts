@@ -36,8 +36,7 @@ export function shortestInterval(values: Float64Array, level: number): [number, 
 	if (!(level > 0 && level <= 1)) throw new Error(`A share lies in (0, 1]; got ${level}.`);
 	assertAllFinite(values, 'value');
 	const sorted = Float64Array.from(values).sort();
-	// Rounding of level × count must not ask for one value more: 0.95 × 20 is 19.
-	const held = Math.min(sorted.length, Math.max(1, Math.ceil(level * sorted.length - 1e-9)));
+	const held = Math.ceil(level * sorted.length);
 	let best: [number, number] = [sorted[0] ?? 0, sorted[held - 1] ?? 0];
 	for (let from = 1; from + held <= sorted.length; from++) {
 		const next: [number, number] = [sorted[from] ?? 0, sorted[from + held - 1] ?? 0];

@@ -4,7 +4,7 @@ import type { PermutationStatistic } from '../permutationDesign.ts';
 import { type CladeAge, cladeAges, cladeCollector, collectCladesInPlace } from './cladeAges.ts';
 import { nodeScores } from './nodeScores.ts';
 import { addPairWeightsInPlace, foldPairsInPlace } from './pairWeights.ts';
-import { layTree, type PosteriorTree } from './posteriorTree.ts';
+import { layTreeInPlace, roomForTree, type PosteriorTree } from './posteriorTree.ts';
 import { commonestSplit, countRootSplitInPlace, type RootSplit } from './rootSplits.ts';
 import { overlapFacts, treeLine } from './treeLine.ts';
 
@@ -56,18 +56,20 @@ export function gatherTrees(gathering: Gathering): GatheredTrees {
 	const { trees, displayed, overlap, tipCount, statistics, nameOf } = gathering;
 	const facts = overlapFacts(overlap, tipCount);
 	const sums = statistics.map((statistic) => ({ statistic, weights: new Float64Array(tipCount ** 2), perSpread: 0 }));
-	const clades = cladeCollector(displayed);
+	const clades = cladeCollector(displayed, tipCount);
 	const splits: RootSplit[] = [];
 	const lines: { slope: number; intercept: number; r: number; rootAge: number }[] = [];
+	const laid = roomForTree(tipCount);
 	for (const tree of trees) {
-		const laid = layTree(tree);
+		layTreeInPlace(laid, tree);
 		try {
+			const ofSlope = nodeScores('slope', laid);
 			for (const sum of sums) {
-				const { scores, spread } = nodeScores(sum.statistic, laid);
+				const { scores, spread } = sum.statistic === 'slope' ? ofSlope : nodeScores(sum.statistic, laid);
 				addPairWeightsInPlace(sum.weights, laid, { statistic: sum.statistic, scores });
 				sum.perSpread += 1 / spread;
 			}
-			lines.push({ ...treeLine(facts, laid), rootAge: tree.ages[0] ?? 0 });
+			lines.push({ ...treeLine(facts, laid, ofSlope), rootAge: tree.ages[0] ?? 0 });
 		} catch (thrown) {
 			throw named(thrown, nameOf(lines.length));
 		}

@@ -1,5 +1,5 @@
 import type { PermutationStatistic } from '../permutationDesign.ts';
-import type { LaidTree } from './posteriorTree.ts';
+import { LAID_BLOCK_WIDTH, type LaidTree } from './posteriorTree.ts';
 
 type Scored = { readonly statistic: PermutationStatistic; readonly scores: Float64Array };
 
@@ -11,48 +11,68 @@ type Scored = { readonly statistic: PermutationStatistic; readonly scores: Float
  * @param scored - a statistic with its `nodeScores`
  */
 export function addPairWeightsInPlace(weights: Float64Array, laid: LaidTree, { statistic, scores }: Scored): void {
-	const { tree, internal, childCount, tipFrom, tipTo, nodeTo, pairs } = laid;
+	if (statistic === 'nodes-nested') return addNestedInPlace(weights, laid, scores);
+	const { tree, blocks, blockCount, pairs } = laid;
 	const { rows } = tree;
-	const nested = statistic === 'nodes-nested';
-	// Nested: 1/(number of children) multiplied over the nodes below the one being visited; children come before parents.
-	const share = new Float64Array(rows.length).fill(1);
-	for (let slot = internal.length - 1; slot >= 0; slot--) {
-		const node = internal[slot] ?? 0;
-		const q = childCount[node] ?? 0;
-		const columnFrom = tipFrom[node] ?? 0;
-		const score = scores[slot] ?? 0;
-		const weight = nested ? (score * 2) / (q * (q - 1)) : statistic === 'nodes-plain' ? score / (pairs[slot] ?? 1) : score;
-		for (let child = nodeTo[node + 1] ?? 0; child < (nodeTo[node] ?? 0); child = nodeTo[child] ?? 0) {
-			const block = { rowFrom: tipFrom[child] ?? 0, rowTo: tipTo[child] ?? 0, columnFrom };
-			if (nested) addSharesInPlace(weights, rows, { ...block, weight, share });
-			else addInPlace(weights, rows, { ...block, weight });
-		}
-		if (nested) for (let tip = columnFrom; tip < (tipTo[node] ?? 0); tip++) share[tip] = (share[tip] ?? 0) / q;
-	}
-}
-
-/** A child's tips, against those of the children before it. */
-type Block = { readonly rowFrom: number; readonly rowTo: number; readonly columnFrom: number; readonly weight: number };
-
-function addInPlace(weights: Float64Array, rows: Int32Array, { rowFrom, rowTo, columnFrom, weight }: Block): void {
-	for (let row = rowFrom; row < rowTo; row++) {
-		const start = (rows[row] ?? 0) * rows.length;
-		for (let column = columnFrom; column < rowFrom; column++) {
-			const cell = start + (rows[column] ?? 0);
-			weights[cell] = (weights[cell] ?? 0) + weight;
+	const n = rows.length;
+	for (let block = 0; block < blockCount * LAID_BLOCK_WIDTH; block += LAID_BLOCK_WIDTH) {
+		const slot = blocks[block] ?? 0;
+		const rowFrom = blocks[block + 1] ?? 0;
+		const rowTo = blocks[block + 2] ?? 0;
+		const columnFrom = blocks[block + 3] ?? 0;
+		const weight = (scores[slot] ?? 0) / (statistic === 'nodes-plain' ? (pairs[slot] ?? 1) : 1);
+		for (let row = rowFrom; row < rowTo; row++) {
+			const start = (rows[row] ?? 0) * n;
+			for (let column = columnFrom; column < rowFrom; column++) {
+				const cell = start + (rows[column] ?? 0);
+				weights[cell] = (weights[cell] ?? 0) + weight;
+			}
 		}
 	}
 }
 
-function addSharesInPlace(weights: Float64Array, rows: Int32Array, block: Block & { readonly share: Float64Array }): void {
-	const { rowFrom, rowTo, columnFrom, weight, share } = block;
-	for (let row = rowFrom; row < rowTo; row++) {
-		const start = (rows[row] ?? 0) * rows.length;
-		const ofRow = weight * (share[row] ?? 0);
-		for (let column = columnFrom; column < rowFrom; column++) {
-			const cell = start + (rows[column] ?? 0);
-			weights[cell] = (weights[cell] ?? 0) + ofRow * (share[column] ?? 0);
+/**
+ * Nested: 2/(q (q - 1)) at the node, times 1/(number of children) over the nodes strictly below it on both paths. `share`
+ * holds those products for the tips below the node being visited; nodes come before their parents.
+ */
+function addNestedInPlace(weights: Float64Array, laid: LaidTree, scores: Float64Array): void {
+	const { tree, internalCount, nodeOf, childCount, blockTo, blocks, tipFrom, tipTo } = laid;
+	const { rows } = tree;
+	const n = rows.length;
+	const share = new Float64Array(n).fill(1);
+	const ofColumn = new Float64Array(n);
+	for (let slot = internalCount - 1; slot >= 0; slot--) {
+		const node = nodeOf[slot] ?? 0;
+		const q = childCount[slot] ?? 0;
+		const from = tipFrom[node] ?? 0;
+		const to = tipTo[node] ?? 0;
+		const weight = ((scores[slot] ?? 0) * 2) / (q * (q - 1));
+		for (let tip = from; tip < to; tip++) ofColumn[tip] = weight * (share[tip] ?? 0);
+		for (let block = (blockTo[slot] ?? 0) - q + 1; block < (blockTo[slot] ?? 0); block++) {
+			const rowFrom = blocks[block * LAID_BLOCK_WIDTH + 1] ?? 0;
+			const rowTo = blocks[block * LAID_BLOCK_WIDTH + 2] ?? 0;
+			for (let row = rowFrom; row < rowTo; row++) {
+				const start = (rows[row] ?? 0) * n;
+				const ofRow = share[row] ?? 0;
+				addRowInPlace(weights, rows, { start, from, to: rowFrom, ofRow, ofColumn });
+			}
 		}
+		for (let tip = from; tip < to; tip++) share[tip] = (share[tip] ?? 0) / q;
+	}
+}
+
+type Row = {
+	readonly start: number;
+	readonly from: number;
+	readonly to: number;
+	readonly ofRow: number;
+	readonly ofColumn: Float64Array;
+};
+
+function addRowInPlace(weights: Float64Array, rows: Int32Array, { start, from, to, ofRow, ofColumn }: Row): void {
+	for (let column = from; column < to; column++) {
+		const cell = start + (rows[column] ?? 0);
+		weights[cell] = (weights[cell] ?? 0) + ofRow * (ofColumn[column] ?? 0);
 	}
 }
 

@@ -1,5 +1,5 @@
 import type { LaidTree } from './posteriorTree.ts';
-import { nodeScores } from './nodeScores.ts';
+import type { NodeScores } from './nodeScores.ts';
 import { nodeSums } from './nodeSums.ts';
 
 /** The line of overlap on age over all pairs of one tree. */
@@ -24,19 +24,20 @@ export function overlapFacts(overlap: Float64Array, n: number): OverlapFacts {
 	return { overlap, mean, spread: Math.sqrt(squares) };
 }
 
-/** @throws {InputError} as `nodeScores` */
-export function treeLine({ overlap, mean, spread }: OverlapFacts, laid: LaidTree): TreeLine {
-	const { scores, spread: ageSpread } = nodeScores('slope', laid);
+/** @param scored - `nodeScores` of the slope */
+export function treeLine({ overlap, mean, spread }: OverlapFacts, laid: LaidTree, scored: NodeScores): TreeLine {
+	const { scores, spread: ageSpread } = scored;
+	const { pairs, ages } = laid;
 	const sums = nodeSums(overlap, laid);
 	let product = 0;
 	let ageSum = 0;
 	let total = 0;
 	for (let slot = 0; slot < sums.length; slot++) {
-		const pairs = laid.pairs[slot] ?? 0;
+		const count = pairs[slot] ?? 0;
 		// Scores sum to 0 over pairs, so taking the mean out changes nothing but the rounding.
-		product += (scores[slot] ?? 0) * ((sums[slot] ?? 0) - pairs * mean);
-		ageSum += pairs * (laid.ages[slot] ?? 0);
-		total += pairs;
+		product += (scores[slot] ?? 0) * ((sums[slot] ?? 0) - count * mean);
+		ageSum += count * (ages[slot] ?? 0);
+		total += count;
 	}
 	const slope = product / ageSpread;
 	return { slope, intercept: mean - (slope * ageSum) / total, r: Math.max(-1, Math.min(1, product / spread)) };
