@@ -12,6 +12,7 @@ import { nodeAverages } from '#lib/statistics/nodeAverages.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
 import { permutationTest } from '#lib/statistics/permutationTest.ts';
+import { alsoTested, declaredStatistics } from './alsoTested.ts';
 import { resultBlocks } from './blocks/resultBlocks.ts';
 import { findingOf } from './findingOf.ts';
 import { describePermutation } from './describePermutation.ts';
@@ -19,6 +20,7 @@ import { nodeRows } from './nodeRows.ts';
 import { plateData } from './plateData.ts';
 import { prepareAnalysis, type PreparedAnalysis } from './prepareAnalysis.ts';
 import { progressReporter } from './progressReporter.ts';
+import { refuseAgeZero } from './refuseAgeZero.ts';
 
 /** Changes whenever a published number could change; printed in every report. */
 export const ENGINE = { version: '1.0.0', kernel: 'typescript-blocks' } as const;
@@ -39,11 +41,12 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 	const line = pick(linearRegression(lower.ages, lower.overlaps));
 
 	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	refuseAgeZero(design, plan);
 	const onProgress = report && progressReporter({ plan, regression: line, lower, report });
 	const outcome = permutationTest(design, {
 		permutations: plan.permutations,
 		seed: plan.seed,
-		keep: [...new Set(['nodes-plain', plan.statistic] as const)],
+		keep: [...new Set(['nodes-plain', ...declaredStatistics(plan)] as const)],
 		...(onProgress ? { onProgress } : {})
 	});
 
@@ -59,7 +62,7 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 		dropped: [...prepared.dropped],
 		remarks: [...prepared.remarks],
 		regression: line,
-		permutation,
+		permutation: { ...permutation, ...alsoTested(design, outcome, plan) },
 		mantel: mantelStatistics,
 		nodeAverages: {
 			nodes: nodeRows(prepared, averages),

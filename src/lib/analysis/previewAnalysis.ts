@@ -7,18 +7,22 @@ import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
 import { isExact } from '#lib/statistics/permutationTest.ts';
 import { smallestFreeP } from './attainable.ts';
+import { cladeGroups } from './cladeGroups.ts';
 import { nicheTraits } from './nicheTraits.ts';
 import { prepareAnalysis } from './prepareAnalysis.ts';
+import { refuseAgeZero } from './refuseAgeZero.ts';
 
 /**
  * What an analysis would use and could at best say, without running it.
- * @throws {InputError} as `prepareAnalysis`, `preparePermutation` and `nicheTraits`: exactly what would stop the analysis itself
+ * @throws {InputError} as `prepareAnalysis`, `preparePermutation`, `cladeGroups` and `nicheTraits`: exactly what would stop the analysis itself
  */
 export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPreview {
 	const prepared = prepareAnalysis(inputs, plan);
 	const { tree, ages, species, response, dropped, remarks } = prepared;
 	nicheTraits(prepared, inputs, plan);
 	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	refuseAgeZero(design, plan);
+	cladeGroups(prepared, plan);
 	const exact = isExact(design, false, plan.permutations);
 	const sides = plan.alternative === 'two-sided' ? 2 : 1;
 	return {

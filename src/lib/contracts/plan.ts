@@ -26,7 +26,11 @@ export const planRequestSchema = z.strictObject({
 	seed: z.number().int().min(0).max(SEED_LIMIT).optional(),
 	covariates: z.array(id).max(20).default([]),
 	clades: z
-		.strictObject({ minTips: z.number().int().min(2).default(3), declared: z.array(z.array(z.string())).optional() })
+		.strictObject({
+			minTips: z.number().int().min(2).max(2000).default(3),
+			/** groups named beforehand, tested in place of all clades */
+			declared: z.array(z.array(z.string()).min(2).max(2000)).min(1).max(50).optional()
+		})
 		.nullable()
 		.default(null),
 	signal: z

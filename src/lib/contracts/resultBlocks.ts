@@ -93,11 +93,27 @@ export const cladeRowSchema = z.object({
 	difference: z.number(),
 	p: probability,
 	pAdjusted: probability,
-	/** null where it could not be asked, `whyNotBeyond` says why */
+	/** shuffles among the species of the clade above it only; null where that cannot be asked, `whyNotBeyond` says why */
 	pBeyondParent: probability.nullable(),
+	/** adjusted for all clades asked about; below the root from `p`; null where no p could be small enough */
+	pBeyondParentAdjusted: probability.nullable(),
 	whyNotBeyond: z.string().optional(),
+	/** the clade above it; null for a declared group that is no clade */
+	parent: z.object({ node: z.number().int(), label: z.string(), tips: z.number().int() }).nullable(),
 	smallestP: probability,
-	testable: z.boolean()
+	/** whether an adjusted p within the level was within reach; `whyNotTestable` says why not */
+	testable: z.boolean(),
+	whyNotTestable: z.string().optional(),
+	/** both adjusted p-values are within the level: what is marked on the tree */
+	holds: z.boolean()
+});
+
+/** How the clades were tested together. */
+export const cladeTestSchema = z.object({
+	exact: z.boolean(),
+	/** n! when exact, else shuffles */
+	count: z.number().int(),
+	minTips: z.number().int().nullable()
 });
 
 export const sistersBlockSchema = z.object({
@@ -216,6 +232,7 @@ export type AlsoTested = z.infer<typeof alsoTestedSchema>;
 export type PartialBlock = z.infer<typeof partialBlockSchema>;
 export type MatrixRegressionBlock = z.infer<typeof matrixRegressionBlockSchema>;
 export type CladeRow = z.infer<typeof cladeRowSchema>;
+export type CladeTestBlock = z.infer<typeof cladeTestSchema>;
 export type SistersBlock = z.infer<typeof sistersBlockSchema>;
 export type AgeClass = z.infer<typeof ageClassSchema>;
 export type FallBlock = z.infer<typeof fallBlockSchema>;

@@ -30,7 +30,7 @@ describe('testClades', () => {
 		);
 		expect({ exact, count }).toEqual({ exact: true, count: 24 });
 		expect(clades).toHaveLength(1);
-		expect(clades[0]).toMatchObject({ p: 6 / 24, pAdjusted: 6 / 24, smallestP: 1 / 4, testable: false, holds: false });
+		expect(clades[0]).toMatchObject({ p: 6 / 24, pAdjusted: 6 / 24, smallestP: 1 / 4, smallestAdjustedP: 1 / 4, holds: false });
 		expect(clades[0]?.contrast.difference).toBeCloseTo(4 / 15, 14);
 	});
 

@@ -38,8 +38,8 @@ export type TestedClade = {
 	readonly pAdjusted: number;
 	/** whatever the data: 1 / C(n, size), and no less than 1 / (m + 1) when drawn */
 	readonly smallestP: number;
-	/** whether an adjusted p within the level was within reach */
-	readonly testable: boolean;
+	/** the adjusted p it would have at `smallestP` */
+	readonly smallestAdjustedP: number;
 	/** null for a group that is no clade of the tree */
 	readonly beyond: BeyondParent | null;
 	/** both adjusted p-values are within the level */
@@ -99,7 +99,7 @@ export function testClades(question: CladeQuestion): CladeTest {
 			p,
 			pAdjusted,
 			smallestP,
-			testable: reachable(judged.minima, smallestP) <= alpha,
+			smallestAdjustedP: reachable(judged.minima, smallestP),
 			beyond: found,
 			holds: pAdjusted <= alpha && found !== null && found.pAdjusted !== null && found.pAdjusted <= alpha
 		};
