@@ -1,27 +1,37 @@
 /**
- * Entry of a compute thread: a message in, one call of analysis, a message out. A refusal of the data crosses the
- * thread boundary as plain data, because an error class would not survive it.
+ * Entry of a compute thread: a message in, one call of analysis or of a drawing, a message out. A refusal of the data
+ * crosses the thread boundary as plain data, because an error class would not survive it.
  */
 import type { MessagePort } from 'node:worker_threads';
 import { computeTasks } from '#lib/analysis/computeTasks.ts';
-import type { ComputeOutcome, ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
+import type { ComputeProgress } from '#lib/contracts/compute.ts';
+import type { ThreadOutcome, ThreadTask, ThreadTasks } from '#lib/contracts/threadTasks.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
+import { drawingTasks } from '#lib/server/exports/drawingTasks.ts';
 
-type Message<Task extends ComputeTask> = {
+type Handlers = {
+	readonly [Task in ThreadTask]: (
+		argument: ThreadTasks[Task]['argument'],
+		report: (progress: ComputeProgress) => void
+	) => ThreadTasks[Task]['answer'];
+};
+const tasks: Handlers = { ...computeTasks, ...drawingTasks };
+
+type Message<Task extends ThreadTask> = {
 	readonly task: Task;
-	readonly argument: ComputeTasks[Task]['argument'];
+	readonly argument: ThreadTasks[Task]['argument'];
 	readonly port: MessagePort | null;
 };
 
-export default async function answer<Task extends ComputeTask>({
+export default async function answer<Task extends ThreadTask>({
 	task,
 	argument,
 	port
-}: Message<Task>): Promise<ComputeOutcome<Task>> {
+}: Message<Task>): Promise<ThreadOutcome<Task>> {
 	const report = (progress: ComputeProgress) => port?.postMessage(progress);
 	try {
-		return { ok: true, value: await computeTasks[task](argument, report) };
+		return { ok: true, value: await tasks[task](argument, report) };
 	} catch (thrown) {
 		if (!(thrown instanceof InputError)) throw thrown;
 		const where = thrown.where === undefined ? {} : { where: thrown.where };

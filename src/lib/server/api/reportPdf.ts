@@ -2,7 +2,7 @@ import PDFDocument from 'pdfkit';
 import drawSvg from 'svg-to-pdfkit';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { FigureSettings } from '#lib/server/exports/figureSettings.ts';
-import { exportFont } from '#lib/server/exports/platePng.ts';
+import { exportFont } from '#lib/server/exports/exportFonts.ts';
 import { drawPlate, type PlateSvg } from '#lib/server/exports/plateSvg.ts';
 
 export type ReportWords = {

@@ -29,6 +29,8 @@ export const FIGURE_DEFAULTS: FigureSettings = {
 	average: 'nested'
 };
 
+export const INCH_MM = 25.4;
+
 const LIMITS = { widthMm: [30, 300], dpi: [72, 1200], typeSizePt: [6, 14] } as const;
 
 /**

@@ -2,7 +2,7 @@ import PDFDocument from 'pdfkit';
 import drawSvg from 'svg-to-pdfkit';
 import type { PlateInput } from '#lib/figures/plateModel.ts';
 import type { FigureSettings } from './figureSettings.ts';
-import { exportFont } from './platePng.ts';
+import { exportFont } from './exportFonts.ts';
 import { drawPlate } from './plateSvg.ts';
 
 /** The plate as a one-page PDF of exactly its size, fonts embedded, text selectable. */

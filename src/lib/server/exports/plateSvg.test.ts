@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { microPlate } from '#lib/figures/microPlate.fixture.ts';
 import { renderPlatePdf } from './platePdf.ts';
-import { renderPlatePng } from './platePng.ts';
 import { drawPlate, renderPlateSvg } from './plateSvg.ts';
 
 const AWKWARD = ['Rana <b>', 'Rana "q" & o\u2019d', 'Rana caf\u00e9', 'Rana </text><script>'];
@@ -38,7 +37,7 @@ describe('renderPlateSvg', () => {
 	it('refuses a width, a resolution or a type size no figure has', () => {
 		expect(() => renderPlateSvg(microPlate(), { widthMm: 20 })).toThrow('Expected widthMm between 30 and 300; got 20.');
 		expect(() => renderPlateSvg(microPlate(), { typeSizePt: 5 })).toThrow('typeSizePt');
-		expect(() => renderPlatePng(microPlate(), { dpi: Number.NaN })).toThrow('dpi');
+		expect(() => renderPlateSvg(microPlate(), { dpi: Number.NaN })).toThrow('dpi');
 	});
 
 	it('draws even the narrowest figure without a negative size', () => {
@@ -49,16 +48,6 @@ describe('renderPlateSvg', () => {
 	it('keeps the width that was asked in every direction and palette', () => {
 		for (const widthMm of [30, 84, 129, 300])
 			expect(drawPlate(microPlate(), { widthMm, palette: 'viridis' }, 'pt').widthPt).toBeCloseTo((widthMm * 72) / 25.4, 9);
-	});
-});
-
-describe('renderPlatePng', () => {
-	// 84 mm at 300 dpi: 84 / 25.4 × 300 = 992.1 pixels; 300 dpi are 11,811 pixels per metre.
-	it('has the pixels of its width and says its resolution', () => {
-		const png = renderPlatePng(microPlate(), { widthMm: 84, dpi: 300 });
-		expect(png.readUInt32BE(16)).toBe(992);
-		const place = png.indexOf('pHYs');
-		expect([png.readUInt32BE(place + 4), png.readUInt32BE(place + 8), png[place + 12]]).toEqual([11811, 11811, 1]);
 	});
 });
 

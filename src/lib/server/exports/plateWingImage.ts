@@ -1,6 +1,7 @@
-import { crc32, deflateSync } from 'node:zlib';
+import { deflateSync } from 'node:zlib';
 import type { Palette } from '#lib/figures/palette.ts';
 import { classShare, RAMP_CLASSES, rampClass } from '#lib/figures/wingGeometry.ts';
+import { pngChunk } from './pngChunk.ts';
 
 /** Patches of so many pixels keep their edges in readers that smooth pictures. */
 const PATCH = 6;
@@ -41,13 +42,4 @@ export function wingImage(count: number, shareOf: (i: number, j: number) => numb
 
 function classOf(share: number): number {
 	return Number.isNaN(share) ? MISSING : rampClass(share);
-}
-
-/** One chunk of a PNG file: length, type, data, checksum. */
-export function pngChunk(type: string, data: Buffer): Buffer {
-	const body = Buffer.concat([Buffer.from(type, 'latin1'), data]);
-	const ends = Buffer.alloc(8);
-	ends.writeUInt32BE(data.length, 0);
-	ends.writeUInt32BE(crc32(body), 4);
-	return Buffer.concat([ends.subarray(0, 4), body, ends.subarray(4)]);
 }

@@ -1,5 +1,6 @@
 import { MessageChannel, receiveMessageOnPort } from 'node:worker_threads';
-import type { ComputeOutcome, ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/compute.ts';
+import type { ComputeProgress } from '#lib/contracts/compute.ts';
+import type { ThreadOutcome, ThreadTask, ThreadTasks } from '#lib/contracts/threadTasks.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import { runtime } from '#lib/server/heldRuntime.ts';
@@ -26,16 +27,16 @@ export class ComputeRefusedError extends InputError {
  * @throws {InputError} when the data do not allow it, with `remarks` where there are any
  * @throws {Error} named AbortError after `signal`; any other error is a defect of ours
  */
-export async function compute<Task extends ComputeTask>(
+export async function compute<Task extends ThreadTask>(
 	task: Task,
-	argument: ComputeTasks[Task]['argument'],
+	argument: ThreadTasks[Task]['argument'],
 	{ onProgress, signal }: ComputeOptions = {}
-): Promise<ComputeTasks[Task]['answer']> {
+): Promise<ThreadTasks[Task]['answer']> {
 	const pool = runtime().pool.current();
 	const channel = onProgress === undefined ? null : new MessageChannel();
 	channel?.port2.on('message', (progress: ComputeProgress) => onProgress?.(progress));
 	try {
-		const outcome: ComputeOutcome<Task> = await pool.run(
+		const outcome: ThreadOutcome<Task> = await pool.run(
 			{ task, argument, port: channel?.port1 ?? null },
 			{ transferList: channel === null ? [] : [channel.port1], signal: signal ?? null }
 		);
