@@ -12,6 +12,7 @@ import * as reports from '#lib/server/repositories/reports.ts';
 import * as texts from '#lib/server/repositories/texts.ts';
 import { treeInText, type TreeSet } from '#lib/server/repositories/treeSetRows.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { findRenewals } from './analyses/renewals.server.ts';
 import { questionParts } from './questionParts.ts';
 import { restsOnOld } from './reports/restsOnOld.server.ts';
 import { tinyTree } from './tinyTree.ts';
@@ -40,6 +41,7 @@ export async function studyHome(access: Access, study: string) {
 		),
 		moreRuns: Math.max(0, runs.length - WINGS_SHOWN),
 		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
+		wasRenewed: (await findRenewals(access, asked)).length > 0,
 		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
 		reports: await Promise.all(saved.slice(0, LINES_SHOWN).map((report) => reportLine(access, report, asked)))
 	};

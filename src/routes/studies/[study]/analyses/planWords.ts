@@ -1,5 +1,5 @@
 import { MEASURE_NAMES, type Measure } from '#lib/contracts/measure.ts';
-import type { Alternative, Statistic } from '#lib/contracts/plan.ts';
+import type { Alternative, Plan, Statistic } from '#lib/contracts/plan.ts';
 
 /** How each choice of a plan is written in its sentence, and what it means. */
 type Choice<Value> = { readonly value: Value; readonly words: string; readonly means: string };
@@ -75,4 +75,21 @@ const COMMON_WORD = /^(Summary|Consensus|Dated|Species|Posterior|Time)(?= )/;
 export function treeWords({ label, treeCount }: Trees, tree: number): string {
 	const name = /^(the|a|an)\s/i.test(label) ? label : `the ${label.replace(COMMON_WORD, (word) => word.toLowerCase())}`;
 	return treeCount === 1 ? name : `tree ${tree} of “${label}”`;
+}
+
+type AskedOf = {
+	readonly run: { readonly measure: Measure; readonly label: string };
+	readonly tree: Trees;
+	readonly plan: Pick<Plan, 'tree' | 'statistic' | 'species'>;
+};
+
+/** What an analysis was asked, in one line. */
+export function askedWords({ run, tree, plan }: AskedOf): string {
+	const parts = [
+		measureWords(run),
+		treeWords(tree, plan.tree === 'all' ? 0 : plan.tree),
+		wordsOf(STATISTIC_CHOICES, plan.statistic),
+		...(plan.species === 'shared' ? [] : [`${plan.species.length} chosen species`])
+	];
+	return parts.join(' · ');
 }

@@ -133,8 +133,13 @@ export async function runAgain({ params, request, locals }: RequestEvent) {
 		if (message !== null) refused.push(message);
 	}
 	if (refused.length > 0)
-		return fail(422, { care: { material: `${kind}:${id}`, values: {}, message: [...new Set(refused)].join(' ') } });
-	redirect(303, `/studies/${params.study}/analyses`);
+		return fail(422, { care: { material: `${kind}:${id}`, values: {}, message: notAllRun(refused, stale.length) } });
+	redirect(303, `/studies/${params.study}/analyses/changes`);
+}
+
+function notAllRun(refused: readonly string[], asked: number): string {
+	const others = refused.length < asked ? ' The others are run again; the list of analyses tells what changed in them.' : '';
+	return `${[...new Set(refused)].join(' ')}${others}`;
 }
 
 /** @returns the sentence of a refusal, null when it waits to run */
