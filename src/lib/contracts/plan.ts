@@ -3,6 +3,9 @@ import { z } from 'zod';
 export const STATISTICS = ['slope', 'slope-log-age', 'nodes-plain', 'nodes-nested', 'spearman'] as const;
 export const ALTERNATIVES = ['less', 'greater', 'two-sided'] as const;
 export const PERMUTATION_LIMIT = 1_000_000;
+/** Species of one clade, and clades that can be declared beforehand. */
+export const CLADE_LIMIT = 2000;
+export const CLADES_LIMIT = 50;
 /** Seeds are whole numbers that a person can copy: 0 to 2³² − 1. */
 export const SEED_LIMIT = 0xffff_ffff;
 
@@ -27,9 +30,9 @@ export const planRequestSchema = z.strictObject({
 	covariates: z.array(id).max(20).default([]),
 	clades: z
 		.strictObject({
-			minTips: z.number().int().min(2).max(2000).default(3),
+			minTips: z.number().int().min(2).max(CLADE_LIMIT).default(3),
 			/** groups named beforehand, tested in place of all clades */
-			declared: z.array(z.array(z.string()).min(2).max(2000)).min(1).max(50).optional()
+			declared: z.array(z.array(z.string()).min(2).max(CLADE_LIMIT)).min(1).max(CLADES_LIMIT).optional()
 		})
 		.nullable()
 		.default(null),

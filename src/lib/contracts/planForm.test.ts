@@ -28,7 +28,31 @@ describe('planForm', () => {
 		]);
 	});
 
+	it('reads several statistics a line each, and clades of a size or declared by their species', () => {
+		expect(planForm.parse(values)).toMatchObject({ alsoTest: [], clades: null });
+		const asked = { ...values, alsoTest: '\nspearman\nnodes-plain', clades: 'all', cladeTips: '5' };
+		expect(planForm.parse(asked)).toMatchObject({ alsoTest: ['spearman', 'nodes-plain'], clades: { minTips: 5 } });
+		const declared = 'Rana alba, Rana nigra\r\nRana nigra; Rana viridis ,Rana rosea';
+		expect(planForm.parse({ ...values, clades: 'declared', declared }).clades).toEqual({
+			minTips: 3,
+			declared: [
+				['Rana alba', 'Rana nigra'],
+				['Rana nigra', 'Rana viridis', 'Rana rosea']
+			]
+		});
+	});
+
+	it('refuses declared clades that are none', () => {
+		const sentence = (declared: string) =>
+			planForm.safeParse({ ...values, clades: 'declared', declared }).error?.issues[0]?.message;
+		expect(sentence('')).toContain('Name at least one clade');
+		expect(sentence('Rana alba')).toContain('at least 2 species');
+	});
+
 	it.each([
+		['alsoTest', 'median'],
+		['clades', 'some'],
+		['cladeTips', '1'],
 		['seed', '4294967296'],
 		['seed', '-1'],
 		['permutations', '0'],
@@ -41,7 +65,7 @@ describe('planForm', () => {
 	])('refuses %s of %j with a sentence', (field, text) => {
 		const parsed = planForm.safeParse({ ...values, [field]: text });
 		expect(parsed.success).toBe(false);
-		expect(parsed.error?.issues[0]?.path).toEqual([field]);
+		expect(parsed.error?.issues[0]?.path[0]).toBe(field);
 		expect(parsed.error?.issues[0]?.message).toMatch(/[.]$/);
 	});
 });
@@ -51,5 +75,8 @@ describe('planValues', () => {
 	it('is undone by reading the form', () => {
 		const plan = planSchema.parse({ ...planForm.parse({ ...values, species: 'a\nb\nc\nd', transform: 'logit' }), tree: 3 });
 		expect(planSchema.parse(planForm.parse(planValues(plan)))).toEqual(plan);
+		const clades = { minTips: 4, declared: [['a', 'b', 'c']] };
+		const more = planSchema.parse({ ...plan, alsoTest: ['spearman', 'slope'], clades });
+		expect(planSchema.parse(planForm.parse(planValues(more)))).toEqual(more);
 	});
 });

@@ -1,6 +1,8 @@
 import { z } from 'zod';
 import {
 	ALTERNATIVES,
+	CLADE_LIMIT,
+	CLADES_LIMIT,
 	PERMUTATION_LIMIT,
 	planRequestSchema,
 	SEED_LIMIT,
@@ -20,10 +22,17 @@ export const PLAN_FIELDS = [
 	'transform',
 	'alpha',
 	'permutations',
-	'seed'
+	'seed',
+	'alsoTest',
+	'clades',
+	'cladeTips',
+	'declared'
 ] as const;
 export type PlanField = (typeof PLAN_FIELDS)[number];
 export type PlanValues = Readonly<Record<PlanField, string>>;
+
+/** Fields that a plan begins without. */
+export const UNASKED = { alsoTest: '', clades: '', cladeTips: '3', declared: '' } as const satisfies Partial<PlanValues>;
 
 const wholeNumber = (rule: string, { from, to }: { from: number; to: number }) =>
 	z
@@ -33,18 +42,40 @@ const wholeNumber = (rule: string, { from, to }: { from: number; to: number }) =
 		.transform((text) => Number(text.replaceAll(/[,\s]/g, '')))
 		.pipe(z.number(rule).int(rule).min(from, rule).max(to, rule));
 
-/** One name a line; nothing means every species that tree and matrix share. */
-const speciesText = z.string().transform((text) => {
-	const names = text
+const linesOf = (text: string) =>
+	text
 		.split(/\r?\n/)
 		.map((line) => line.trim())
 		.filter((line) => line !== '');
+
+/** One name a line; nothing means every species that tree and matrix share. */
+const speciesText = z.string().transform((text) => {
+	const names = linesOf(text);
 	return names.length === 0 ? ('shared' as const) : [...new Set(names)];
 });
 
 const SEED_RULE = `A seed is a whole number from 0 to ${SEED_LIMIT.toLocaleString('en')}; the same seed gives the same shuffles.`;
 const SHUFFLE_RULE = `Shuffles are a whole number from 1 to ${PERMUTATION_LIMIT.toLocaleString('en')}.`;
 const ALPHA_RULE = 'The level is a number between 0 and 1, such as 0.05.';
+
+/** A clade a line, its species parted by commas or semicolons. */
+const cladesText = z
+	.string()
+	.transform((text) =>
+		linesOf(text).map((line) =>
+			line
+				.split(/[,;]/)
+				.map((name) => name.trim())
+				.filter((name) => name !== '')
+		)
+	)
+	.pipe(
+		z
+			.array(z.array(z.string()).min(2, 'A declared clade has at least 2 species: a line each, parted by commas.'))
+			.max(CLADES_LIMIT, `At most ${CLADES_LIMIT} clades can be declared.`)
+	);
+
+const CLADE_RULE = `The fewest species of a clade are a whole number from 2 to ${CLADE_LIMIT.toLocaleString('en')}.`;
 
 export const planForm = z
 	.object({
@@ -57,9 +88,24 @@ export const planForm = z
 		transform: z.enum(['none', 'logit'], 'Choose the scale of the overlap.'),
 		alpha: z.string().trim().transform(Number).pipe(z.number(ALPHA_RULE).gt(0, ALPHA_RULE).lt(1, ALPHA_RULE)),
 		permutations: wholeNumber(SHUFFLE_RULE, { from: 1, to: PERMUTATION_LIMIT }),
-		seed: wholeNumber(SEED_RULE, { from: 0, to: SEED_LIMIT })
+		seed: wholeNumber(SEED_RULE, { from: 0, to: SEED_LIMIT }),
+		alsoTest: z
+			.string()
+			.transform((text) => [...new Set(linesOf(text))])
+			.pipe(z.array(z.enum(STATISTICS, 'Choose among the statistics that are offered.')))
+			.default([]),
+		clades: z.enum(['', 'all', 'declared'], 'Choose which clades are looked at.').default(''),
+		cladeTips: wholeNumber(CLADE_RULE, { from: 2, to: CLADE_LIMIT }).default(3),
+		declared: cladesText.default([])
 	})
-	.transform((fields): PlanRequest => planRequestSchema.parse(fields));
+	.refine(({ clades, declared }) => clades !== 'declared' || declared.length > 0, {
+		path: ['declared'],
+		message: 'Name at least one clade: a line each, its species parted by commas.'
+	})
+	.transform(({ clades, cladeTips, declared, ...fields }): PlanRequest => {
+		const asked = { '': null, all: { minTips: cladeTips }, declared: { minTips: cladeTips, declared } }[clades];
+		return planRequestSchema.parse({ ...fields, clades: asked });
+	});
 
 /** A stored plan as the fields of the form. */
 export function planValues(plan: Plan): PlanValues {
@@ -73,6 +119,10 @@ export function planValues(plan: Plan): PlanValues {
 		transform: plan.transform,
 		alpha: String(plan.alpha),
 		permutations: String(plan.permutations),
-		seed: String(plan.seed)
+		seed: String(plan.seed),
+		alsoTest: plan.alsoTest.join('\n'),
+		clades: plan.clades === null ? '' : plan.clades.declared === undefined ? 'all' : 'declared',
+		cladeTips: String(plan.clades?.minTips ?? UNASKED.cladeTips),
+		declared: (plan.clades?.declared ?? []).map((names) => names.join(', ')).join('\n')
 	};
 }
