@@ -2,6 +2,8 @@ import { bottom, type Rect } from './geometry.ts';
 import { grouped } from './numberText.ts';
 import type { OverlapAxis } from './overlapAxis.ts';
 import { TYPE } from './plateLayout.ts';
+import { grownTo } from './pourIn.ts';
+import type { Poured } from './pour.svelte.ts';
 import type { PlateInput } from './plateModel.ts';
 import { endAtRoot, endBars, endsScale, filledEdges, type EndBar, type EndsScale } from './shuffledEnds.ts';
 
@@ -11,6 +13,8 @@ export type EndsScene = {
 	readonly inset: number;
 	readonly width: number;
 	readonly bars: readonly EndBar[];
+	/** of the fullest bar */
+	readonly longest: number;
 	/** ends of single shuffled lines, drawn where all relabellings are few enough to be counted out */
 	readonly ticks: readonly number[];
 	/** end of the observed line on the axis of d and in e */
@@ -46,13 +50,14 @@ export function endsScene(input: PlateInput, { panel, axis, rootAge, stacked, in
 	const scale = endsScale([...shuffled.map(toEnd), observedEnd], axis);
 	const place = (slope: number) => scale.place(toEnd(slope));
 	const width = panel.width - inset;
-	const bars = countedOut ? [] : endBars(plate.slopeHistogram, place, width * (stacked ? 0.9 : 0.62));
+	const longest = width * (stacked ? 0.9 : 0.62);
+	const bars = countedOut ? [] : endBars(plate.slopeHistogram, place, longest);
 	const ticks = countedOut ? [...new Set(plate.fanSlopes.map(place))] : [];
 	const here = scale.place(observedEnd);
 	const words = wordsOf(countedOut ? permutation.count : null, shuffled.length > 0, scale, stacked);
 	const marks = [...bars.flatMap(({ y, height }) => [y, y + height]), ...ticks];
 	return {
-		...{ inset, width, bars, ticks, place, words },
+		...{ inset, width, bars, longest, ticks, place, words },
 		observed: { onAxis: axis.scale(Math.min(axis.high, Math.max(axis.low, observedEnd))), here },
 		leaders: leadersOf(scale, axis),
 		times: scale.magnified && Math.round(scale.magnified.times),
@@ -81,4 +86,11 @@ function wordPlaces(observed: number, marks: readonly number[], { panel, lines }
 		return { wordsY: Math.max(panel.y + TYPE, top - 7 - room), observedY: Math.min(bottom(panel), floor + TYPE * 1.2) };
 	}
 	return { wordsY: Math.min(bottom(panel) - room, floor + TYPE * 1.3), observedY: Math.max(panel.y + TYPE, top - 6) };
+}
+
+/** The bars of e in the middle of being poured in. */
+export function pouredBars({ plate }: PlateInput, ends: EndsScene, { share, counts }: Poured): readonly EndBar[] {
+	return ends.bars.length === 0
+		? []
+		: endBars({ ...plate.slopeHistogram, counts: [...counts] }, ends.place, ends.longest * grownTo(share));
 }

@@ -2,6 +2,7 @@ import { formatCount } from '#lib/analysis/words/numbers.ts';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import { MEASURE_NAMES, type Measure } from '#lib/contracts/measure.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
+import { furtherFacts } from '../furtherWords.ts';
 import { STATISTIC_CHOICES, treeWords, wordsOf } from '../planWords.ts';
 
 export type Fact = { readonly term: string; readonly fact: string };
@@ -32,6 +33,7 @@ export function planFacts(plan: Plan, tested: Tested | null = null): Fact[] {
 		{ term: 'Judged by', fact: wordsOf(STATISTIC_CHOICES, plan.statistic).replace(/^the /, '') },
 		...(plan.transform === 'logit' ? [{ term: 'Scale', fact: 'logit' }] : []),
 		{ term: 'Level', fact: String(plan.alpha) },
+		...furtherFacts(plan),
 		...shuffleFacts(plan, tested)
 	];
 }
