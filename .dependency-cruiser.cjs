@@ -39,6 +39,12 @@ module.exports = {
 			'overlap knows only overlaps. What joins them with trees belongs in analysis.'
 		),
 		room(
+			'kernel-alone',
+			'^src/kernel/',
+			'^src/kernel/',
+			'The kernel is another language: it is compiled, not imported. Call it through statistics/kernelRegions.ts.'
+		),
+		room(
 			'statistics-of-sciences',
 			'^src/lib/statistics/',
 			'^src/lib/(statistics|phylogeny|overlap|remarks)/',

@@ -46,6 +46,11 @@ export default ts.config(
 		rules: { 'max-lines-per-function': 'off' }
 	},
 	{
+		// A compiled function takes addresses and counts as plain numbers; it knows no other options.
+		files: ['src/kernel/*.ts'],
+		rules: { 'max-params': ['error', 8] }
+	},
+	{
 		files: sciences,
 		ignores: ['**/*.test.ts'],
 		rules: {

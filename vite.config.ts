@@ -2,6 +2,10 @@ import { sveltekit } from '@sveltejs/kit/vite';
 import tailwindcss from '@tailwindcss/vite';
 import { defineConfig } from 'vitest/config';
 import { computeBundle } from './esbuild.config.mjs';
+import { compileKernel } from './src/kernel/compileKernel.mjs';
+
+// Everything that vite starts, tests too, needs the kernel; it is compiled only when its sources have changed.
+await compileKernel();
 
 export default defineConfig({
 	plugins: [tailwindcss(), computeBundle(), sveltekit()],

@@ -10,6 +10,7 @@ step() {
 }
 
 bash tests/ensureChromium.sh
+step 'compiled kernel' npm run --silent kernel
 step 'generated types' npx svelte-kit sync
 step 'format' npm run --silent check:format
 step 'lint' npm run --silent check:lint

@@ -1,4 +1,4 @@
-import { denseSumsByLoop } from './denseSumsByLoop.ts';
+import { kernelRegions } from './kernelRegions.ts';
 import type { ShuffleBatch } from './shuffleBatches.ts';
 
 export type DenseSumsInput = {
@@ -10,19 +10,33 @@ export type DenseSumsInput = {
 };
 
 /**
- * The sum over pairs of moved cell times weight, for some arrangements: Mantel's z of any two symmetric matrices. Cost:
- * each of the n(n-1)/2 pairs once per arrangement.
+ * The sum over pairs of moved cell times weight, for some arrangements: Mantel's z of any two symmetric matrices. By the
+ * compiled kernel, bit for bit as `denseSumsByLoop`. Cost: each of the n(n-1)/2 pairs once per arrangement.
  *
  * @param batch - as `shuffleBatches` hands it out
  * @returns shape (count,); a fresh array
  */
 export function denseSumsOfBatch(
-	input: DenseSumsInput,
+	{ cells, weights, tipCount }: DenseSumsInput,
 	{ count, arrangements }: Pick<ShuffleBatch, 'count' | 'arrangements'>
 ): Float64Array {
-	const sums = new Float64Array(count);
-	for (let row = 0; row < count; row++) {
-		sums[row] = denseSumsByLoop(input, arrangements.subarray(row * input.tipCount, (row + 1) * input.tipCount));
-	}
-	return sums;
+	const regions = kernelRegions({
+		cells,
+		weights,
+		arrangements: arrangements.subarray(0, count * tipCount),
+		sums: 8 * count,
+		offsets: 4 * tipCount
+	});
+	const { address } = regions;
+	// The fields of DenseSumsTask in src/kernel.
+	regions.run('denseSums', [
+		address('cells'),
+		address('weights'),
+		address('arrangements'),
+		count,
+		tipCount,
+		address('sums'),
+		address('offsets')
+	]);
+	return regions.doubles('sums', count).slice();
 }

@@ -5,7 +5,7 @@ import { midRanks } from './midRanks.ts';
 import { lowerTriangle, symmetricMatrix } from './pairValues.ts';
 import { permutationPValue, type TailProbabilities } from './permutationPValue.ts';
 import { randomStream, STREAM_DOMAIN } from './randomStream.ts';
-import { CHUNK_SHUFFLES } from './runChunks.ts';
+import { CHUNK_SHUFFLES } from './shuffleBatches.ts';
 import type { TailCounts } from './tally.ts';
 
 export type MantelTestOptions = {

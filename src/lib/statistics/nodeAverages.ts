@@ -2,8 +2,8 @@ import { type AgedTree, treeShape } from './agedTree.ts';
 import { assertAllFinite } from './assertAllFinite.ts';
 import { identityArrangement } from './arrangements.ts';
 import { assertOverlap } from './assertOverlap.ts';
-import { emptyBlockSums, interleave, sumBlocksInPlace } from './blockSums.ts';
 import { fitLine, type Line } from './linearRegression.ts';
+import { nodeSumsByLoop } from './nodeSumsByLoop.ts';
 import { pairBlocks } from './pairBlocks.ts';
 
 export type NodeAverage = {
@@ -39,9 +39,7 @@ export function nodeAverages(tree: AgedTree, overlap: Float64Array): NodeAverage
 	const tipCount = shape.tips.length;
 	assertOverlap(overlap, tipCount);
 	const layout = pairBlocks(shape);
-	const sums = emptyBlockSums(shape.internal.length);
-	const cells = interleave(overlap, new Float64Array(overlap.length));
-	sumBlocksInPlace(sums, { layout, cells, tipCount }, identityArrangement(tipCount));
+	const sums = nodeSumsByLoop({ layout, overlap, tipCount }, identityArrangement(tipCount));
 
 	const nodes = Array.from(shape.internal, (node, slot): NodeAverage => {
 		const age = tree.ages[node] ?? Number.NaN;

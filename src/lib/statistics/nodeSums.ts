@@ -1,5 +1,5 @@
-import { nodeSumsByLoop } from './nodeSumsByLoop.ts';
-import type { PairBlocks } from './pairBlocks.ts';
+import { kernelRegions } from './kernelRegions.ts';
+import { BLOCK_WIDTH, type PairBlocks } from './pairBlocks.ts';
 import type { ShuffleBatch } from './shuffleBatches.ts';
 
 export type NodeSumsInput = {
@@ -18,22 +18,58 @@ export type NodeSums = {
 };
 
 /**
- * Sums by node of some arrangements of the matrix. Cost: each of the n(n-1)/2 pairs once per arrangement.
+ * Sums by node of some arrangements of the matrix, by the compiled kernel, bit for bit those of `nodeSumsByLoop`. Cost:
+ * each of the n(n-1)/2 pairs once per arrangement.
  *
  * @param batch - as `shuffleBatches` hands it out
  * @returns shape (count, slots) each, row-major; fresh arrays
  */
-export function nodeSumsOfBatch(
-	input: NodeSumsInput,
-	{ count, arrangements }: Pick<ShuffleBatch, 'count' | 'arrangements'>
-): NodeSums {
-	const slots = input.layout.pairs.length;
-	const plain = new Float64Array(count * slots);
-	const nested = new Float64Array(count * slots);
-	for (let row = 0; row < count; row++) {
-		const sums = nodeSumsByLoop(input, arrangements.subarray(row * input.tipCount, (row + 1) * input.tipCount));
-		plain.set(sums.plain, row * slots);
-		nested.set(sums.nested, row * slots);
-	}
-	return { plain, nested };
+export function nodeSumsOfBatch(input: NodeSumsInput, batch: Pick<ShuffleBatch, 'count' | 'arrangements'>): NodeSums {
+	const regions = kernelRegions({
+		...nodeSumsParts(input, batch.count),
+		arrangements: batch.arrangements.subarray(0, batch.count * input.tipCount)
+	});
+	regions.run('nodeSums', nodeSumsTask(input, batch.count, regions.address));
+	const length = batch.count * input.layout.pairs.length;
+	return { plain: regions.doubles('plain', length).slice(), nested: regions.doubles('nested', length).slice() };
+}
+
+type NodeSumsRegion = keyof ReturnType<typeof nodeSumsParts> | 'arrangements';
+
+/** What node sums of up to `count` arrangements need in the kernel's memory beside the arrangements. */
+export function nodeSumsParts({ layout, overlap, tipCount }: NodeSumsInput, count: number) {
+	const sumBytes = 8 * count * layout.pairs.length;
+	return {
+		matrix: overlap,
+		blocks: layout.blocks,
+		weights: layout.weights,
+		weightShift: layout.weightShift,
+		childPairWeight: layout.childPairWeight,
+		plain: sumBytes,
+		nested: sumBytes,
+		offsets: 4 * tipCount
+	};
+}
+
+/** The fields of `NodeSumsTask` in src/kernel. */
+export function nodeSumsTask(
+	{ layout, tipCount }: NodeSumsInput,
+	count: number,
+	address: (name: NodeSumsRegion) => number
+): number[] {
+	return [
+		address('matrix'),
+		address('arrangements'),
+		count,
+		tipCount,
+		address('blocks'),
+		layout.blocks.length / BLOCK_WIDTH,
+		address('weights'),
+		address('weightShift'),
+		address('childPairWeight'),
+		layout.pairs.length,
+		address('plain'),
+		address('nested'),
+		address('offsets')
+	];
 }

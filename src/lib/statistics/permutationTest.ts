@@ -1,12 +1,9 @@
-import { arrangementCount, type Group } from './arrangements.ts';
-import type { PermutationDesign, PermutationStatistic } from './permutationDesign.ts';
+import type { CountedStatistic, PermutationStatistic } from './functionals.ts';
+import type { PermutationDesign } from './permutationDesign.ts';
 import { permutationPValue, type TailProbabilities } from './permutationPValue.ts';
-import { chunksOf, enumerateInBatches, runChunks } from './runChunks.ts';
+import { chunksOf, enumerateInBatches, tallyChunks } from './runChunks.ts';
+import { plannedArrangements } from './shuffleBatches.ts';
 import { addCounts, mergeTallies, type TailCounts, type Tally } from './tally.ts';
-
-/** Up to 8 species (8! = 40,320) the null is always enumerated, however few shuffles were asked for. */
-const ALWAYS_EXACT_SPECIES = 8;
-const ALWAYS_EXACT_ARRANGEMENTS = 40_320;
 
 export type TestedStatistic = TailCounts & TailProbabilities & { readonly observed: number };
 
@@ -16,7 +13,7 @@ export type NullOutcome = {
 	/** number of arrangements when exact (the observed one is among them), else m shuffles */
 	readonly count: number;
 	/** `slope-log-age` is absent where an internal node has age 0 */
-	readonly statistics: Readonly<Partial<Record<PermutationStatistic, TestedStatistic>>>;
+	readonly statistics: Readonly<Partial<Record<CountedStatistic, TestedStatistic>>>;
 	readonly values: Tally['values'];
 };
 
@@ -44,6 +41,8 @@ export type PermutationOptions = {
 	readonly seed: number;
 	/** statistics whose values are returned beside the slope's */
 	readonly keep?: readonly PermutationStatistic[];
+	/** statistics counted within the deepest split; all of the design unless told otherwise, fewer are faster */
+	readonly withinStatistics?: readonly PermutationStatistic[];
 	/** called after every chunk or batch; it may throw to stop the test */
 	readonly onProgress?: (progress: PermutationProgress) => void;
 };
@@ -54,45 +53,48 @@ export type PermutationOptions = {
  * species; else Monte Carlo. Equal design, seed and number give equal bits.
  */
 export function permutationTest(design: PermutationDesign, options: PermutationOptions): PermutationOutcome {
-	const asked = design.within.length > 0 ? [false, true] : [false];
-	const total = asked.reduce((sum, within) => sum + planned(design, within, options.permutations).count, 0);
-	const report = { done: 0, total };
-	const free = nullOutcome(
-		design,
-		askQuestion(design, false, { ...options, report }),
-		isExact(design, false, options.permutations)
-	);
-	if (design.within.length === 0) return { free, within: null };
-	const inside = nullOutcome(
-		design,
-		askQuestion(design, true, { ...options, report }),
-		isExact(design, true, options.permutations)
-	);
-	return { free, within: { ...inside, sides: design.sides, rootPairShare: design.rootPairShare } };
+	const report = { done: 0, total: plannedTotal(design, options.permutations) };
+	const free = askQuestion(design, false, { ...options, report });
+	const within = design.within.length === 0 ? null : askQuestion(design, true, { ...options, report });
+	return outcomeOf(design, options.permutations, { free, within });
+}
+
+/** The tallies of both questions, whoever ran them, read as p-values. */
+export function outcomeOf(
+	design: PermutationDesign,
+	permutations: number,
+	{ free, within }: { readonly free: Tally; readonly within: Tally | null }
+): PermutationOutcome {
+	const { sides, rootPairShare } = design;
+	return {
+		free: nullOutcome(design, free, isExact(design, false, permutations)),
+		within: within && { ...nullOutcome(design, within, isExact(design, true, permutations)), sides, rootPairShare }
+	};
 }
 
 /** Whether a question is enumerated. */
 export function isExact(design: PermutationDesign, within: boolean, permutations: number): boolean {
-	return planned(design, within, permutations).exact;
+	return plannedOf(design, within, permutations).exact;
 }
 
-/** A merged tally read as p-values. */
-export function nullOutcome(design: PermutationDesign, tally: Tally, exact: boolean): NullOutcome {
-	const statistics: Partial<Record<PermutationStatistic, TestedStatistic>> = {};
+/** Arrangements of both questions together. */
+function plannedTotal(design: PermutationDesign, permutations: number): number {
+	const within = design.within.length === 0 ? 0 : plannedOf(design, true, permutations).count;
+	return plannedOf(design, false, permutations).count + within;
+}
+
+function plannedOf(design: PermutationDesign, within: boolean, permutations: number) {
+	return plannedArrangements({ groups: within ? design.within : design.free, permutations });
+}
+
+/** A merged tally read as p-values, of the statistics that it counted. */
+function nullOutcome(design: PermutationDesign, tally: Tally, exact: boolean): NullOutcome {
+	const statistics: Partial<Record<CountedStatistic, TestedStatistic>> = {};
 	for (const { statistic, observed } of design.functionals) {
 		const counts = tally.counts[statistic];
-		if (!counts) throw new Error(`The tally holds no counts of ${statistic}.`);
-		statistics[statistic] = { observed, ...counts, ...permutationPValue(counts, tally.arrangements, exact) };
+		if (counts) statistics[statistic] = { observed, ...counts, ...permutationPValue(counts, tally.arrangements, exact) };
 	}
 	return { exact, count: tally.arrangements, statistics, values: tally.values };
-}
-
-function planned(design: PermutationDesign, within: boolean, permutations: number): { exact: boolean; count: number } {
-	const groups = within ? design.within : design.free;
-	const all = arrangementCount(groups);
-	const few = all <= ALWAYS_EXACT_ARRANGEMENTS && groups.every(({ from, to }: Group) => to - from <= ALWAYS_EXACT_SPECIES);
-	const exact = few || all <= permutations;
-	return { exact, count: exact ? all : permutations };
 }
 
 type Asking = PermutationOptions & { readonly report: { done: number; readonly total: number } };
@@ -118,15 +120,12 @@ function askQuestion(design: PermutationDesign, within: boolean, asking: Asking)
 	return mergeTallies(tallies);
 }
 
-function* talliesOf(design: PermutationDesign, within: boolean, options: PermutationOptions): Generator<Tally> {
-	const { permutations, seed, keep = ['nodes-plain', 'nodes-nested'] } = options;
+function talliesOf(design: PermutationDesign, within: boolean, options: PermutationOptions): Generator<Tally> {
+	const { permutations, seed, keep = ['nodes-plain', 'nodes-nested'], withinStatistics } = options;
 	// Within the split nothing is drawn, so its values are only memory.
-	const kept: PermutationStatistic[] = within ? [] : ['slope', ...keep];
-	if (isExact(design, within, permutations)) {
-		yield* enumerateInBatches(design, { within, keep: kept });
-		return;
-	}
-	for (let firstChunk = 0; firstChunk < chunksOf(permutations); firstChunk++) {
-		yield runChunks(design, { seed, firstChunk, chunkCount: 1, shuffles: permutations, within, keep: kept });
-	}
+	const kept: CountedStatistic[] = within ? [] : ['slope', ...keep];
+	const statistics = within && withinStatistics ? { statistics: withinStatistics } : {};
+	const wanted = { within, keep: kept, ...statistics };
+	if (isExact(design, within, permutations)) return enumerateInBatches(design, wanted);
+	return tallyChunks(design, { ...wanted, seed, firstChunk: 0, chunkCount: chunksOf(permutations), shuffles: permutations });
 }

@@ -2,7 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { drawnOverlap, drawnTree } from './exampleTrees.ts';
 import { PERMUTATION_STATISTICS, preparePermutation } from './permutationDesign.ts';
 import { randomStream } from './randomStream.ts';
-import { CHUNK_SHUFFLES, chunksOf, enumerate, runChunks } from './runChunks.ts';
+import { chunksOf, enumerate, runChunks } from './runChunks.ts';
+import { CHUNK_SHUFFLES } from './shuffleBatches.ts';
 import { mergeTallies } from './tally.ts';
 
 const stream = randomStream(77, 0, 8);

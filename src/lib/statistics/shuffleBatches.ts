@@ -1,11 +1,11 @@
-import { arrangementCount, type Group, identityArrangement, nextArrangementInPlace, shuffleInPlace } from './arrangements.ts';
-import { randomStream } from './randomStream.ts';
+import { arrangementCount, type Group, identityArrangement, nextArrangementInPlace } from './arrangements.ts';
+import { kernelRegions } from './kernelRegions.ts';
 
 /** Shuffles drawn from one stream. Part of every published number: changing it changes all Monte Carlo results. */
 export const CHUNK_SHUFFLES = 256;
 
 /** Arrangements of an enumeration handed over at once. */
-const BATCH_ARRANGEMENTS = 4096;
+export const BATCH_ARRANGEMENTS = 4096;
 
 /** Up to 8 species (8! = 40,320) the null is always enumerated, however few shuffles were asked for. */
 const ALWAYS_EXACT_SPECIES = 8;
@@ -57,24 +57,29 @@ export function* shuffleBatches(question: ShuffleQuestion, share?: ChunkShare): 
 	else yield* drawnBatches(question, share ?? { firstChunk: 0, chunkCount: Math.ceil(count / CHUNK_SHUFFLES) });
 }
 
+/** Drawn by the compiled kernel, bit for bit as `shuffleInPlace` does with the stream of the chunk. */
 function* drawnBatches(question: ShuffleQuestion, { firstChunk, chunkCount }: ChunkShare): Generator<ShuffleBatch> {
 	const { tipCount, groups, seed, domain, permutations } = question;
 	const arrangements = new Int32Array(CHUNK_SHUFFLES * tipCount);
+	const regions = kernelRegions({
+		drawn: arrangements.byteLength,
+		groups: Int32Array.from(groups.flatMap(({ from, to }) => [from, to]))
+	});
+	const { address } = regions;
 	for (let chunk = firstChunk; chunk < firstChunk + chunkCount; chunk++) {
 		const first = chunk * CHUNK_SHUFFLES;
 		const count = Math.min(CHUNK_SHUFFLES, permutations - first);
 		if (count <= 0) return;
-		const stream = randomStream(seed, chunk, domain);
-		const arrangement = identityArrangement(tipCount);
-		for (let drawn = 0; drawn < count; drawn++) {
-			for (const group of groups) shuffleInPlace(arrangement, stream, group);
-			arrangements.set(arrangement, drawn * tipCount);
-		}
-		yield { first, count, arrangements: arrangements.subarray(0, count * tipCount) };
+		// The fields of ShuffleTask in src/kernel.
+		regions.run('shuffles', [address('drawn'), count, tipCount, address('groups'), groups.length, domain, seed, chunk]);
+		const taken = arrangements.subarray(0, count * tipCount);
+		taken.set(regions.integers('drawn', taken.length));
+		yield { first, count, arrangements: taken };
 	}
 }
 
-function* enumeratedBatches({ tipCount, groups }: ShuffleQuestion): Generator<ShuffleBatch> {
+/** Every arrangement of the groups once, the identity first. */
+export function* enumeratedBatches({ tipCount, groups }: Pick<ShuffleQuestion, 'tipCount' | 'groups'>): Generator<ShuffleBatch> {
 	const arrangements = new Int32Array(BATCH_ARRANGEMENTS * tipCount);
 	const arrangement = identityArrangement(tipCount);
 	let first = 0;

@@ -2,8 +2,8 @@ import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { type AgedTree, treeShape } from './agedTree.ts';
 import { identityArrangement, shuffleInPlace } from './arrangements.ts';
-import { emptyBlockSums, interleave, sumBlocksInPlace } from './blockSums.ts';
 import { drawnOverlap, drawnTree, exampleTree } from './exampleTrees.ts';
+import { nodeSumsByLoop } from './nodeSumsByLoop.ts';
 import { pairBlocks } from './pairBlocks.ts';
 import { randomStream } from './randomStream.ts';
 
@@ -11,8 +11,7 @@ function sumsOf(tree: AgedTree, overlap: Float64Array, arrangement?: Int32Array)
 	const shape = treeShape(tree);
 	const tipCount = shape.tips.length;
 	const layout = pairBlocks(shape);
-	const sums = emptyBlockSums(shape.internal.length);
-	sumBlocksInPlace(sums, { layout, cells: interleave(overlap, overlap), tipCount }, arrangement ?? identityArrangement(tipCount));
+	const sums = nodeSumsByLoop({ layout, overlap, tipCount }, arrangement ?? identityArrangement(tipCount));
 	return { sums, layout, shape };
 }
 
@@ -32,7 +31,7 @@ function nestedAverage(tree: AgedTree, value: (a: number, b: number) => number):
 	});
 }
 
-describe('sumBlocksInPlace', () => {
+describe('nodeSumsByLoop', () => {
 	it('visits every pair once, at the node where it meets', () => {
 		const stream = randomStream(5, 0, 8);
 		const tree = drawnTree(23, stream, { polytomies: true });
