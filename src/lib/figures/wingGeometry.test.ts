@@ -99,6 +99,12 @@ describe('wingInk', () => {
 		expect(ink.classes.reduce((cells, { path }) => cells + path.split('M').length - 1, 0)).toBe(5);
 		expect(ink.missing.split('M')).toHaveLength(4); // three hairlines
 	});
+
+	// By hand: rows 6 apart; cell (1, 2) has its middle at row place 2, 112, and one hairline of 0.92 × 2 × 3.12 across it.
+	it('hatches a small cell by its middle hairline alone', () => {
+		const small = { ...left, pitch: 6, across: 6 };
+		expect(wingInk(small, (i, j) => (i === 1 && j === 2 ? Number.NaN : 0.5)).missing).toBe('M294.13 112h5.74');
+	});
 });
 
 describe('wingOutline', () => {

@@ -76,12 +76,15 @@ function round(value: number): number {
 	return Math.round(value * 100) / 100;
 }
 
-/** Hatching of a missing cell: three hairlines at half, none and half of the way up. */
+/** Rows closer than this have room for one hairline in a cell; more would fill it with grey. */
+const THREE_HAIRLINES_FROM = 7;
+
+/** Hatching of a missing cell: three hairlines at half, none and half of the way up, or the middle one alone. */
 export function hatchPath(wing: WingPlace, i: number, j: number): string {
 	const [x, y] = wingPoint(wing, i, j);
 	const reach = cellReach(wing.pitch);
 	const wide = cellReach(wing.across);
-	return [-0.5, 0, 0.5]
+	return (wing.pitch < THREE_HAIRLINES_FROM ? [0] : [-0.5, 0, 0.5])
 		.map((share) => {
 			const half = wide * (1 - Math.abs(share)) * 0.92;
 			return `M${round(x - half)} ${round(y + share * reach)}h${round(2 * half)}`;
