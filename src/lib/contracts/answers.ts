@@ -2,11 +2,13 @@ import { z } from 'zod';
 import { analysisResultSchema, progressSchema } from './analysisResult.ts';
 import { AGE_UNITS, ANALYSIS_STATUSES, TREE_SET_KINDS } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
+import { covariateReadingSchema } from './covariates.ts';
 import { nicheVariableSchema } from './nicheTables.ts';
 import { planSchema } from './plan.ts';
 import { planContextSchema } from './planContext.ts';
 import { remarkSchema } from './remark.ts';
 import { figureSettingsSchema } from './report.ts';
+import { treeAboutSchema } from './treeAbout.ts';
 
 /** What `/api/v1` answers. The description at `/api/v1/openapi.json` is made from these schemas. */
 
@@ -50,6 +52,7 @@ const listed = z.object({ id: z.string(), label: z.string(), createdAt: time });
 export const studyAnswerSchema = studySchema.extend({
 	treeSets: z.array(listed.extend({ treeCount: count, tipCount: count })),
 	overlapRuns: z.array(listed.extend({ measure: measureSchema, speciesCount: count })),
+	covariates: z.array(listed.extend({ speciesCount: count })),
 	nicheTables: z.array(listed.extend({ variables: z.array(z.string()), speciesCount: count })),
 	analyses: z.array(z.object({ id: z.string(), status, createdAt: time })),
 	reports: z.array(z.object({ id: z.string(), title: z.string(), analysis: z.string(), createdAt: time }))
@@ -90,6 +93,7 @@ export const treeSetAnswerSchema = z.object({
 		})
 	),
 	rootAge: z.number(),
+	about: treeAboutSchema,
 	ultrametricSpread: z.number().nullable(),
 	polytomies: count,
 	remarks
@@ -120,6 +124,15 @@ export const overlapRunAnswerSchema = z.object({
 	/** how the text was read */
 	reading: z.record(z.string(), z.unknown()),
 	remarks
+});
+
+export const covariateCreatedSchema = z.object({ id: z.string(), species: z.array(z.string()), remarks });
+
+export const covariateAnswerSchema = covariateCreatedSchema.extend({
+	label: z.string(),
+	/** as given, or computed: not turned into similarities; null where a pair is missing and on the diagonal */
+	values: z.array(z.array(z.number().nullable())),
+	reading: covariateReadingSchema
 });
 
 export const nicheTableAnswerSchema = z.object({

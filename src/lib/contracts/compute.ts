@@ -1,3 +1,4 @@
+import type { CovariateKind, CovariateReadingNotes, CovariateRequest, CovariateScale } from './covariates.ts';
 import type { NicheTableRequest } from './nicheTables.ts';
 import type { NicheTable } from '#lib/overlap/nicheTable.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
@@ -5,6 +6,7 @@ import type { Remark } from '#lib/remarks/remark.ts';
 import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
 import type { Plan } from './plan.ts';
 import type { AgeUnit, Confirm, OverlapRunRequest } from './materials.ts';
+import type { TreeAbout } from './treeAbout.ts';
 import type { Measure } from './measure.ts';
 
 /** Everything an analysis runs on. Plain data: it crosses a thread boundary. */
@@ -14,6 +16,10 @@ export type AnalysisInputs = {
 	readonly ageUnit: AgeUnit;
 	/** the person accepted that tips be levelled by extending terminal branches */
 	readonly spreadConfirmed: boolean;
+	/** which trees of the text a plan on all of them uses: after `burnIn`, every `thin`-th; every one unless told otherwise */
+	readonly chosen?: { readonly burnIn: number; readonly thin: number };
+	/** what only the author of the tree knows */
+	readonly about?: TreeAbout;
 	readonly measure: Measure;
 	readonly overlap: {
 		readonly species: readonly string[];
@@ -25,6 +31,22 @@ export type AnalysisInputs = {
 	readonly decisions: readonly { readonly from: string; readonly to: string | null; readonly why?: string }[];
 	/** niche positions and what goes with them, when the plan asks for their signal */
 	readonly niches?: { readonly label: string } & Pick<NicheTable, 'species' | 'variables'>;
+};
+
+/** A covariate as it was read: values as they stand. */
+export type CovariateReading = {
+	readonly species: readonly string[];
+	/** strict lower triangle, row by row; NaN where a pair is missing */
+	readonly lower: Float64Array;
+	readonly reading: CovariateReadingNotes;
+	readonly remarks: readonly Remark[];
+};
+
+/** A covariate of a plan, ready to be allowed for. */
+export type CovariateInput = Pick<CovariateReading, 'species' | 'lower' | 'remarks'> & {
+	readonly label: string;
+	readonly kind: CovariateKind;
+	readonly scale: CovariateScale;
 };
 
 /** What is known of one tree of a set without its whole structure. */
@@ -67,6 +89,8 @@ export type AnalysisPreview = {
 	readonly rootPairShare: number;
 	readonly smallestP: number;
 	readonly exact: boolean;
+	/** trees that are averaged over, and the share that has the commonest root split; only for a plan on all trees of a set */
+	readonly trees?: { readonly count: number; readonly splitShare: number };
 	readonly remarks: readonly Remark[];
 };
 
@@ -75,6 +99,7 @@ export type ComputeTasks = {
 	readTrees: { argument: { text: string; confirm?: Confirm }; answer: TreeReading };
 	/** either `csv` or `matrix` */
 	readMatrix: { argument: Pick<OverlapRunRequest, 'measure' | 'confirm' | 'csv' | 'matrix'>; answer: MatrixReading };
+	readCovariate: { argument: Omit<CovariateRequest, 'label'>; answer: CovariateReading };
 	readNicheTable: { argument: Pick<NicheTableRequest, 'csv' | 'roles'>; answer: NicheTable };
 	treeStructure: { argument: { text: string; tree: number; spreadConfirmed: boolean }; answer: TreeStructure };
 	mrcaAges: {

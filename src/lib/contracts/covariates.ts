@@ -39,5 +39,3 @@ export const covariateRequestSchema = z
 	})
 	.refine(({ matrix, csv, places }) => [matrix, csv, places].filter((given) => given !== undefined).length === 1, givenOnce);
 export type CovariateRequest = z.infer<typeof covariateRequestSchema>;
-
-export const covariateChangeSchema = z.strictObject({ label: z.string().trim().min(1).max(200) });

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { measureSchema } from './measureSchema.ts';
+import { treeAboutSchema } from './treeAbout.ts';
 
 export const AGE_UNITS = ['Ma', 'ka', 'relative'] as const;
 export type AgeUnit = (typeof AGE_UNITS)[number];
@@ -28,6 +29,7 @@ export const treeSetRequestSchema = z.strictObject({
 	kind: z.enum(TREE_SET_KINDS).optional(),
 	burnIn: z.number().int().nonnegative().optional(),
 	thin: z.number().int().positive().optional(),
+	about: treeAboutSchema.optional(),
 	confirm: confirmSchema.optional()
 });
 export type TreeSetRequest = z.infer<typeof treeSetRequestSchema>;

@@ -23,6 +23,7 @@ export type AccessObject =
 	| { readonly study: string }
 	| { readonly treeSet: string }
 	| { readonly overlapRun: string }
+	| { readonly covariate: string }
 	| { readonly nicheTable: string }
 	| { readonly analysis: string }
 	| { readonly report: string }

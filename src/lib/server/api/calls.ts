@@ -4,6 +4,8 @@ import {
 	analysisAnswerSchema,
 	analysisStartedSchema,
 	analysisStatusSchema,
+	covariateAnswerSchema,
+	covariateCreatedSchema,
 	namesAnswerSchema,
 	nicheTableAnswerSchema,
 	overlapRunAnswerSchema,
@@ -26,8 +28,10 @@ import {
 	tokenRequestSchema,
 	treeSetRequestSchema
 } from '#lib/contracts/materials.ts';
+import { covariateRequestSchema } from '#lib/contracts/covariates.ts';
 import { nicheTableRequestSchema } from '#lib/contracts/nicheTables.ts';
 import { planRequestSchema } from '#lib/contracts/plan.ts';
+import { treeAboutSchema } from '#lib/contracts/treeAbout.ts';
 import { reportRequestSchema } from '#lib/contracts/report.ts';
 
 export type Answer = {
@@ -111,6 +115,16 @@ export const CALLS: readonly Call[] = [
 		refusals: [400, 422]
 	},
 	{
+		method: 'put',
+		path: '/tree-sets/{treeSet}/about',
+		id: 'describeTreeSet',
+		does: 'Says what only the author of a tree knows: species in the clade, how tips were placed, calibration, source.',
+		needsToken: true,
+		body: treeAboutSchema,
+		answers: [{ status: 200, means: 'As it is kept now', content: json(treeAboutSchema) }],
+		refusals: [400, 413]
+	},
+	{
 		...reading,
 		path: '/tree-sets/{treeSet}/mrca-ages',
 		id: 'mrcaAges',
@@ -135,6 +149,23 @@ export const CALLS: readonly Call[] = [
 		id: 'findOverlapRun',
 		does: 'A run with its values, as similarities.',
 		answers: [{ status: 200, means: 'The run', content: json(overlapRunAnswerSchema) }]
+	},
+	{
+		method: 'post',
+		path: '/studies/{study}/covariates',
+		id: 'createCovariate',
+		does: 'Reads and keeps a covariate: a matrix of numbers of 0 or more, or `places` (species, latitude, longitude) for distances in km.',
+		needsToken: true,
+		body: covariateRequestSchema,
+		answers: [{ status: 201, means: 'Kept, with what was noticed', content: json(covariateCreatedSchema) }],
+		refusals: [400, 413, 422]
+	},
+	{
+		...reading,
+		path: '/covariates/{covariate}',
+		id: 'findCovariate',
+		does: 'A covariate with its values, as given or computed.',
+		answers: [{ status: 200, means: 'The covariate', content: json(covariateAnswerSchema) }]
 	},
 	{
 		method: 'post',

@@ -10,6 +10,8 @@ import { analysisHash, computeArgument, decisionsFor, type Materials } from '#li
 import * as names from '#lib/server/repositories/names.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { nicheTableOf } from './nicheTableOf.ts';
+import { notInStudy } from './notInStudy.ts';
 import { Refusal } from './refusal.ts';
 
 export type Started = {
@@ -47,7 +49,7 @@ type Checked = { readonly written: analyses.NewAnalysis; readonly remarks: reado
 async function checkedPlan(access: Access, request: PlanRequest): Promise<Started | Checked> {
 	const materials = await materialsOf(access, request);
 	const plan = completePlan(request, materials);
-	const decisions = decisionsFor(materials.run, await names.current(access));
+	const decisions = decisionsFor(materials, await names.current(access));
 	const hash = analysisHash(plan, materials, decisions);
 	const held = await analyses.findByHash(access, hash);
 	const isDone = held !== null && held.deletedAt === null && !['stopped', 'failed'].includes(held.status);
@@ -57,27 +59,27 @@ async function checkedPlan(access: Access, request: PlanRequest): Promise<Starte
 	return { written: { plan, hash, decisions }, remarks };
 }
 
-async function materialsOf(access: Access, { treeSet: treeSetId, overlapRun, covariates }: PlanRequest): Promise<Materials> {
+async function materialsOf(
+	access: Access,
+	{ treeSet: treeSetId, overlapRun, covariates, signal }: PlanRequest
+): Promise<Materials> {
 	const treeSet = await treeSets.find(access, treeSetId);
 	if (treeSet === null) throw notInStudy('tree set', treeSetId);
 	const run = await overlapRuns.find(access, overlapRun);
 	if (run === null) throw notInStudy('overlap run', overlapRun);
 	if (covariates[0] !== undefined) throw notInStudy('covariate', covariates[0]);
-	return { treeSet, run };
-}
-
-function notInStudy(what: string, id: string): Refusal {
-	return new Refusal(404, 'not-found', `Expected the id of a ${what} of this study; “${id}” is none, or it was deleted.`);
+	return { treeSet, run, niches: signal === null ? null : await nicheTableOf(access, signal.table) };
 }
 
 /** The plan as it is stored: every default written out, the seed drawn. */
-function completePlan(request: PlanRequest, { treeSet }: Materials): Plan {
+function completePlan(request: PlanRequest, { treeSet, niches }: Materials): Plan {
 	refuseLater(request);
 	const tree = request.tree ?? (treeSet.treeCount === 1 ? 0 : 'all');
 	if (tree === 'all' && treeSet.treeCount > 1) throw chooseATree(treeSet.treeCount);
 	const index = tree === 'all' ? 0 : tree;
 	if (index >= treeSet.treeCount) throw noSuchTree(index, treeSet.treeCount);
-	return { ...request, tree: index, seed: request.seed ?? randomInt(SEED_LIMIT + 1) };
+	const signal = request.signal === null || !niches ? null : { ...request.signal, table: niches.id };
+	return { ...request, tree: index, signal, seed: request.seed ?? randomInt(SEED_LIMIT + 1) };
 }
 
 function chooseATree(count: number): Refusal {
@@ -97,13 +99,12 @@ export function noSuchTree(index: number, count: number): Refusal {
 }
 
 /** A block that would be missing from the result is refused, so that nobody takes its absence for an answer. */
-function refuseLater({ clades, signal, robustness }: PlanRequest): void {
-	const asked = Object.entries({ clades, signal, robustness }).find(([, value]) => value !== null);
-	if (asked === undefined) return;
+function refuseLater({ robustness }: PlanRequest): void {
+	if (robustness === null) return;
 	throw new Refusal(
 		422,
 		'not-offered-yet',
-		`\`${asked[0]}\` is not offered yet. Leave it out, or give null, to run the rest of the plan.`
+		'`robustness` is not offered yet. Leave it out, or give null, to run the rest of the plan.'
 	);
 }
 

@@ -2,6 +2,7 @@ import type { StudyAnswer, studyAnswerSchema } from '#lib/contracts/answers.ts';
 import type { z } from 'zod';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as covariates from '#lib/server/repositories/covariates.ts';
 import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as reports from '#lib/server/repositories/reports.ts';
@@ -29,6 +30,12 @@ export async function listedParts(access: Access): Promise<Parts> {
 			label,
 			createdAt,
 			measure,
+			speciesCount: species.length
+		})),
+		covariates: (await covariates.list(access)).map(({ id, label, createdAt, species }) => ({
+			id,
+			label,
+			createdAt,
 			speciesCount: species.length
 		})),
 		nicheTables: (await nicheTables.list(access)).map(({ id, label, createdAt, variables, species }) => ({

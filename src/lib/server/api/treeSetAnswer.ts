@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import type { treeSetAnswerSchema } from '#lib/contracts/answers.ts';
 import type { TreeStructure } from '#lib/contracts/compute.ts';
+import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import type { TreeSet } from '#lib/server/repositories/treeSetRows.ts';
 import { Refusal } from './refusal.ts';
 
@@ -28,7 +29,8 @@ export function treeSetAnswer(treeSet: TreeSet, structure: TreeStructure, { tree
 		...(members === null ? {} : { members: members[id] ?? [] })
 	}));
 	const { id, label: setLabel, ageUnit, kind, treeCount, ultrametricSpread, polytomies, remarks } = treeSet;
-	const facts = { id, label: setLabel, ageUnit, kind, treeCount, tree };
+	const about = treeSet.about ?? NOTHING_KNOWN;
+	const facts = { id, label: setLabel, ageUnit, kind, treeCount, tree, about };
 	return { ...facts, tips: [...tipNames], nodes, rootAge: age[0] ?? 0, ultrametricSpread, polytomies, remarks: [...remarks] };
 }
 

@@ -1,9 +1,7 @@
-import { sql } from 'drizzle-orm';
 import {
 	bigint,
 	bigserial,
 	boolean,
-	customType,
 	index,
 	integer,
 	jsonb,
@@ -21,70 +19,12 @@ import type { PlanContext } from '#lib/contracts/planContext.ts';
 import type { StoredNicheVariable } from '#lib/contracts/nicheTables.ts';
 import type { TreeAbout } from '#lib/contracts/treeAbout.ts';
 import type { FigureSettings } from '#lib/contracts/report.ts';
-import type { Role } from '#lib/contracts/user.ts';
 import type { AgeUnit, AnalysisStatus, TreeSetKind } from '#lib/contracts/materials.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
+import { bytea, createdAt, deletedAt, id } from './columns.ts';
+import { labs, users } from './peopleTables.ts';
 
-const bytea = customType<{ data: Buffer; driverData: Buffer }>({ dataType: () => 'bytea' });
-
-const id = () => text('id').primaryKey();
-const createdAt = () => timestamp('created_at', { withTimezone: true }).notNull().defaultNow();
-/** set when something is deleted; it can be brought back until it is purged */
-const deletedAt = () => timestamp('deleted_at', { withTimezone: true });
-
-export const users = pgTable(
-	'users',
-	{
-		id: id(),
-		email: text('email').notNull(),
-		name: text('name').notNull(),
-		passphraseHash: text('passphrase_hash').notNull(),
-		/** raised to end every session of the person at once */
-		sessionVersion: integer('session_version').notNull().default(1),
-		isDemo: boolean('is_demo').notNull().default(false),
-		createdAt: createdAt()
-	},
-	(table) => [uniqueIndex('users_email').on(sql`lower(${table.email})`)]
-);
-
-export const labs = pgTable('labs', {
-	id: id(),
-	name: text('name').notNull(),
-	personal: boolean('personal').notNull().default(false),
-	createdAt: createdAt()
-});
-
-export const memberships = pgTable(
-	'memberships',
-	{
-		labId: text('lab_id')
-			.notNull()
-			.references(() => labs.id, { onDelete: 'cascade' }),
-		userId: text('user_id')
-			.notNull()
-			.references(() => users.id, { onDelete: 'cascade' }),
-		role: text('role').$type<Role>().notNull(),
-		createdAt: createdAt()
-	},
-	(table) => [primaryKey({ columns: [table.labId, table.userId] }), index('memberships_user').on(table.userId)]
-);
-
-/** Long-lived bearer tokens of scripts; only the SHA-256 of a token is kept. */
-export const tokens = pgTable(
-	'tokens',
-	{
-		id: id(),
-		userId: text('user_id')
-			.notNull()
-			.references(() => users.id, { onDelete: 'cascade' }),
-		label: text('label').notNull(),
-		hash: text('hash').notNull(),
-		lastUsedAt: timestamp('last_used_at', { withTimezone: true }),
-		createdAt: createdAt(),
-		revokedAt: timestamp('revoked_at', { withTimezone: true })
-	},
-	(table) => [uniqueIndex('tokens_hash').on(table.hash)]
-);
+export * from './peopleTables.ts';
 
 export const studies = pgTable(
 	'studies',
@@ -344,10 +284,3 @@ export const logEntries = pgTable(
 	},
 	(table) => [index('log_entries_study').on(table.studyId), index('log_entries_lab').on(table.labId)]
 );
-
-/** Counts attempts per key (account and address) for the rate limits; old rows are swept. */
-export const attempts = pgTable('attempts', {
-	key: text('key').primaryKey(),
-	count: integer('count').notNull(),
-	windowStart: timestamp('window_start', { withTimezone: true }).notNull()
-});

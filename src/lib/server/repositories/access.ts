@@ -2,7 +2,7 @@ import { and, eq, isNull, type SQL } from 'drizzle-orm';
 import type { Role } from '#lib/contracts/user.ts';
 import type { AccessObject } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
-import { analyses, labs, memberships, nicheTables, overlapRuns, reports, studies, treeSets } from '#lib/server/db/schema.ts';
+import { analyses, covariates, labs, memberships, nicheTables, overlapRuns, reports, studies, treeSets } from '#lib/server/db/schema.ts';
 
 /** Where an object is, and what the asking person is there. */
 export type Place = {
@@ -22,7 +22,7 @@ type Asking = {
 type StudyPart = Exclude<AccessObject, { readonly account: string } | { readonly lab: string }>;
 
 /** The tables whose rows belong to a study. */
-const PARTS = { treeSet: treeSets, overlapRun: overlapRuns, nicheTable: nicheTables, analysis: analyses, report: reports };
+const PARTS = { treeSet: treeSets, overlapRun: overlapRuns, covariate: covariates, nicheTable: nicheTables, analysis: analyses, report: reports };
 
 export async function find(object: Exclude<AccessObject, { readonly account: string }>, asking: Asking): Promise<Place | null> {
 	if ('lab' in object) return findLab(object.lab, asking.user);
@@ -74,6 +74,7 @@ const placeColumns = {
 function partOf(object: Exclude<StudyPart, { readonly study: string }>): [keyof typeof PARTS, string] {
 	if ('treeSet' in object) return ['treeSet', object.treeSet];
 	if ('overlapRun' in object) return ['overlapRun', object.overlapRun];
+	if ('covariate' in object) return ['covariate', object.covariate];
 	if ('nicheTable' in object) return ['nicheTable', object.nicheTable];
 	if ('analysis' in object) return ['analysis', object.analysis];
 	return ['report', object.report];

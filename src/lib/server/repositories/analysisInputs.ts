@@ -1,6 +1,7 @@
 import { eq, and } from 'drizzle-orm';
 import type { AnalysisInputs } from '#lib/contracts/compute.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
+import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import type { Access } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
 import { analyses } from '#lib/server/db/schema.ts';
@@ -8,6 +9,8 @@ import { createHash } from 'node:crypto';
 import { canonicalHash } from './analysisHash.ts';
 import type { NameDecision } from './names.ts';
 import type { UsedDecision } from './analysisRows.ts';
+import { storedVariable, type KeptNicheTable } from './nicheTableRows.ts';
+import * as nicheTables from './nicheTables.ts';
 import { bytesOf, type OverlapRun } from './overlapRunRows.ts';
 import * as overlapRuns from './overlapRuns.ts';
 import { within } from './scope.ts';
@@ -15,17 +18,25 @@ import * as texts from './texts.ts';
 import { treeInText, type TreeSet } from './treeSetRows.ts';
 import * as treeSets from './treeSets.ts';
 
-export type Materials = { readonly treeSet: TreeSet; readonly run: OverlapRun };
+export type Materials = {
+	readonly treeSet: TreeSet;
+	readonly run: OverlapRun;
+	/** when the plan asks for signal in niche positions */
+	readonly niches?: KeptNicheTable | null;
+};
 
 /** What a compute thread is given. The tree of the plan is counted in the text, not in the chosen trees of the set. */
 export type ComputeArgument = { readonly inputs: AnalysisInputs; readonly plan: Plan };
 
 /**
- * The decisions that can touch a run, in a fixed order: those about names it holds, and every name left out, since that
+ * The decisions that can touch what is compared, in a fixed order: those about names it holds, and every name left out, since that
  * may be a tip of the tree.
  */
-export function decisionsFor(run: Pick<OverlapRun, 'species'>, decisions: readonly NameDecision[]): UsedDecision[] {
-	const held = new Set(run.species);
+export function decisionsFor(
+	{ run, niches }: { run: Pick<OverlapRun, 'species'>; niches?: Pick<KeptNicheTable, 'species'> | null },
+	decisions: readonly NameDecision[]
+): UsedDecision[] {
+	const held = new Set([...run.species, ...(niches?.species ?? [])]);
 	return decisions
 		.filter(({ from, to }) => held.has(from) || to === null)
 		.map(({ from, to, why }) => ({ from, to, ...(why === '' ? {} : { why }) }))
@@ -33,29 +44,39 @@ export function decisionsFor(run: Pick<OverlapRun, 'species'>, decisions: readon
 }
 
 /** What makes an analysis the one it is: the plan and every input it runs on. */
-export function analysisHash(plan: Plan, { treeSet, run }: Materials, decisions: readonly UsedDecision[]): string {
-	const { textHash, ageUnit, spreadConfirmed, chosen } = treeSet;
+export function analysisHash(plan: Plan, { treeSet, run, niches }: Materials, decisions: readonly UsedDecision[]): string {
+	const { textHash, ageUnit, spreadConfirmed, chosen, about } = treeSet;
 	const { species, measure, lower } = run;
 	const values = createHash('sha256').update(bytesOf(lower)).digest('hex');
 	return canonicalHash({
 		plan,
-		trees: { textHash, ageUnit, spreadConfirmed, chosen },
+		trees: { textHash, ageUnit, spreadConfirmed, chosen, ...(about === null ? {} : { about }) },
 		overlap: { species, measure, values },
+		...(niches ? { niches: { species: niches.species, variables: niches.variables.map(storedVariable) } } : {}),
 		decisions
 	});
 }
 
 export async function computeArgument(
 	plan: Plan,
-	{ treeSet, run }: Materials,
+	{ treeSet, run, niches }: Materials,
 	decisions: readonly UsedDecision[]
 ): Promise<ComputeArgument> {
 	const { species, lower, remarks, measure } = run;
-	const { ageUnit, spreadConfirmed, chosen } = treeSet;
+	const { ageUnit, spreadConfirmed, chosen, about } = treeSet;
 	const tree = plan.tree === 'all' ? plan.tree : treeInText(chosen, plan.tree);
 	const treeText = await texts.load(treeSet.textHash);
 	return {
-		inputs: { treeText, ageUnit, spreadConfirmed, measure, overlap: { species, lower, remarks }, decisions },
+		inputs: {
+			treeText,
+			ageUnit,
+			spreadConfirmed,
+			about: about ?? NOTHING_KNOWN,
+			measure,
+			overlap: { species, lower, remarks },
+			decisions,
+			...(niches ? { niches: { label: niches.label, species: niches.species, variables: niches.variables } } : {})
+		},
 		plan: { ...plan, tree }
 	};
 }
@@ -80,5 +101,16 @@ export async function inputsOf(access: Access, id: string): Promise<ComputeArgum
 	const treeSet = await treeSets.findKept(access, row.treeSetId);
 	const run = await overlapRuns.findKept(access, row.overlapRunId);
 	if (treeSet === null || run === null) throw new Error(`Expected the materials of analysis ${id}; one is not there.`);
-	return computeArgument(row.plan, { treeSet, run }, row.decisions);
+	return computeArgument(row.plan, { treeSet, run, niches: await nichesOf(access, row.plan) }, row.decisions);
+}
+
+/**
+ * The niche table of a stored plan, deleted ones too; null when the plan asks for no signal.
+ * @throws {Error} when it is not there: a defect of ours
+ */
+export async function nichesOf(access: Access, { signal }: Plan): Promise<KeptNicheTable | null> {
+	if (signal?.table === undefined) return null;
+	const table = await nicheTables.findKept(access, signal.table);
+	if (table === null) throw new Error(`Expected the niche table ${signal.table}; it is not there.`);
+	return table;
 }

@@ -1,8 +1,8 @@
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Access } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
-import { overlapRuns, treeSets } from '#lib/server/db/schema.ts';
-import { analysisHash, decisionsFor } from './analysisInputs.ts';
+import { nicheTables, overlapRuns, treeSets } from '#lib/server/db/schema.ts';
+import { analysisHash, decisionsFor, nichesOf } from './analysisInputs.ts';
 import type { ListedAnalysis } from './analysisRows.ts';
 import { canonicalJson } from './analysisHash.ts';
 import * as names from './names.ts';
@@ -17,6 +17,8 @@ export type Change = {
 		| 'tree-set-deleted'
 		| 'overlap-run-replaced'
 		| 'overlap-run-deleted'
+		| 'niche-table-replaced'
+		| 'niche-table-deleted'
 		| 'material-read-again'
 		| 'names-changed';
 	readonly message: string;
@@ -29,16 +31,18 @@ export async function outOfDate(access: Access, analysis: Used): Promise<Change[
 	const treeSet = await trees.findKept(access, analysis.treeSetId);
 	const run = await runs.findKept(access, analysis.overlapRunId);
 	if (treeSet === null || run === null) throw new Error('Expected the materials of the analysis; one is not there.');
+	const niches = await nichesOf(access, analysis.plan);
 	const changes: Change[] = [];
 	if (treeSet.deletedAt !== null) changes.push(await lostTreeSet(access, treeSet));
 	if (run.deletedAt !== null) changes.push(await lostRun(access, run));
-	if (analysisHash(analysis.plan, { treeSet, run }, analysis.decisions) !== analysis.hash) {
+	if (niches?.deletedAt) changes.push(await lostNicheTable(access, niches));
+	if (analysisHash(analysis.plan, { treeSet, run, niches }, analysis.decisions) !== analysis.hash) {
 		changes.push({
 			code: 'material-read-again',
 			message: 'A remark about the tree or the matrix was settled in another way since.'
 		});
 	}
-	const decisions = decisionsFor(run, await names.current(access));
+	const decisions = decisionsFor({ run, niches }, await names.current(access));
 	if (canonicalJson(decisions) !== canonicalJson(analysis.decisions)) {
 		changes.push({ code: 'names-changed', message: 'Decisions about names have changed since.' });
 	}
@@ -63,4 +67,14 @@ async function lostRun(access: Access, { id, label }: { id: string; label: strin
 	return newer[0] === undefined
 		? { code: 'overlap-run-deleted', message: `The overlap run “${label}” was deleted since.` }
 		: { code: 'overlap-run-replaced', message: `The overlap run “${label}” was replaced by “${newer[0].label}” since.` };
+}
+
+async function lostNicheTable(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
+	const newer = await db()
+		.select({ label: nicheTables.label })
+		.from(nicheTables)
+		.where(and(within(access, nicheTables.studyId), eq(nicheTables.replaces, id), isNull(nicheTables.deletedAt)));
+	return newer[0] === undefined
+		? { code: 'niche-table-deleted', message: `The niche table “${label}” was deleted since.` }
+		: { code: 'niche-table-replaced', message: `The niche table “${label}” was replaced by “${newer[0].label}” since.` };
 }

@@ -1,7 +1,7 @@
 import { and, desc, eq, isNull } from 'drizzle-orm';
 import { labOf, personOf, studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
-import { labs, memberships, nameDecisions, overlapRuns, studies, treeSets } from '#lib/server/db/schema.ts';
+import { labs, memberships, nameDecisions, nicheTables, overlapRuns, studies, treeSets } from '#lib/server/db/schema.ts';
 import * as logBook from './logBook.ts';
 import { newId } from './newId.ts';
 import * as openings from './openings.ts';
@@ -165,6 +165,14 @@ async function copyMaterials(source: Access, target: Access): Promise<void> {
 		await db().insert(overlapRuns).values(copied);
 		await openings.inherit(target, copied, { access: source, id: row.id });
 	}
+	const tables = await db()
+		.select()
+		.from(nicheTables)
+		.where(and(eq(nicheTables.studyId, from), isNull(nicheTables.deletedAt)));
+	for (const row of tables)
+		await db()
+			.insert(nicheTables)
+			.values({ ...row, id: newId(), studyId, createdBy, replaces: null });
 	const decided = await db().select().from(nameDecisions).where(eq(nameDecisions.studyId, from)).orderBy(nameDecisions.id);
 	for (const { fromName, toTip, why, withdrawn } of decided) {
 		await db().insert(nameDecisions).values({ studyId, fromName, toTip, why, withdrawn, decidedBy: createdBy });

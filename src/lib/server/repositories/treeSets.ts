@@ -1,5 +1,6 @@
 import { and, desc, eq, isNotNull, isNull } from 'drizzle-orm';
 import type { TreeSetRequest } from '#lib/contracts/materials.ts';
+import { isNothingKnown, type TreeAbout } from '#lib/contracts/treeAbout.ts';
 import { personOf, studyOf, type Access } from '#lib/server/access.ts';
 import { db, transaction } from '#lib/server/db/client.ts';
 import { treeSets } from '#lib/server/db/schema.ts';
@@ -70,9 +71,17 @@ export async function replace(access: Access, id: string, request: TreeSetReques
 type Kept = { read: TreeSetFacts; textHash: string; replaces: string | null };
 
 function keep(access: Access, request: TreeSetRequest, { read, textHash, replaces }: Kept): Promise<TreeSet> {
-	const { label, ageUnit, confirm } = request;
+	const { label, ageUnit, confirm, about } = request;
 	const spreadConfirmed = confirm?.spread === true;
-	const row = { id: newId(), studyId: studyOf(access), createdBy: personOf(access), label, ageUnit, spreadConfirmed };
+	const row = {
+		id: newId(),
+		studyId: studyOf(access),
+		createdBy: personOf(access),
+		label,
+		ageUnit,
+		spreadConfirmed,
+		about: about ?? null
+	};
 	return transaction(async (tx) => {
 		const rows = await tx
 			.insert(treeSets)
@@ -124,6 +133,11 @@ export async function confirmSpread(access: Access, id: string): Promise<boolean
 	const { kind, chosen } = found;
 	const read = await readTreeSet({ text, kind, ...chosen, confirm: { spread: true } });
 	return changeNoted(access, id, { values: { ...read, spreadConfirmed: true }, action: 'tree-set.changed' });
+}
+
+/** What only the author of the tree knows; analyses made before become out of date, for their cautions rest on it. */
+export async function describe(access: Access, id: string, about: TreeAbout): Promise<boolean> {
+	return changeNoted(access, id, { values: { about: isNothingKnown(about) ? null : about }, action: 'tree-set.changed' });
 }
 
 type Values = Partial<typeof treeSets.$inferInsert>;
