@@ -28,6 +28,17 @@ describe('registering', () => {
 		expect(account.text).toMatch(/Ada Burnside(&#39;|')s lab/);
 	});
 
+	it('carries the address, and where the person wanted to go, to the sign-in form, and not in the address bar', async () => {
+		const person = visitor();
+		const fields = { name: 'Cy', email: 'cy@lab.example', passphrase: PASSPHRASE };
+		const registered = await person.post('/register?next=%2Flabs%2Fx', fields);
+		expect(registered.to).toBe('/sign-in?registered&next=%2Flabs%2Fx');
+		const form = await person.get('/sign-in?registered');
+		expect(form.text).toContain('value="cy@lab.example"');
+		expect((await person.signIn('cy@lab.example', PASSPHRASE)).status).toBe(303);
+		expect(person.cookies.has('kithline-registered')).toBe(false);
+	});
+
 	it('answers the same for an address that has an account, and leaves that account alone', async () => {
 		await signedIn('taken@lab.example');
 		const again = await visitor().post('/register', {

@@ -5,14 +5,16 @@ import { checkPassphrase } from '#lib/server/checkPassphrase.ts';
 import { runtime } from '#lib/server/heldRuntime.ts';
 import { parseForm } from '#lib/server/parseForm.ts';
 import { safeNext } from '#lib/server/safeNext.ts';
+import { REGISTERED } from '../register/registered.ts';
 import type { Actions, PageServerLoad } from './$types';
 
-export const load: PageServerLoad = ({ locals, url }) => {
+export const load: PageServerLoad = ({ locals, url, cookies }) => {
 	const next = safeNext(url.searchParams.get('next'), url.origin);
 	if (locals.user !== null) redirect(303, next);
 	return {
 		next,
 		isDemo: runtime().isDemo,
+		email: cookies.get(REGISTERED) ?? '',
 		justRegistered: url.searchParams.has('registered'),
 		justChanged: url.searchParams.has('changed')
 	};
@@ -27,6 +29,7 @@ export const actions: Actions = {
 		if (!verdict.ok) {
 			return fail(verdict.reason === 'wait' ? 429 : 400, { email, faults: {}, message: verdict.message });
 		}
+		event.cookies.delete(REGISTERED, { path: '/sign-in' });
 		await startSession(event, verdict.person);
 		redirect(303, safeNext(next, event.url.origin));
 	}
