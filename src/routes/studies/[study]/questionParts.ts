@@ -1,5 +1,6 @@
 import { MEASURE_NAMES, type Measure } from '#lib/contracts/measure.ts';
 import type { Alternative } from '#lib/contracts/plan.ts';
+import { treeWords } from './analyses/planWords.ts';
 
 /** A stretch of the sentence; one with `href` leads to where that choice is made. */
 export type QuestionPart = { readonly text: string; readonly href?: string };
@@ -10,8 +11,8 @@ export type QuestionFacts = {
 	readonly sharedSpecies: number | null;
 	/** of the newest run; null before there is one */
 	readonly measure: Measure | null;
-	/** of the newest tree set; null before there is one */
-	readonly trees: { readonly kind: 'summary' | 'posterior'; readonly count: number } | null;
+	/** the tree set that was asked about last, else the newest, and which of its trees; null before there is one */
+	readonly trees: { readonly label: string; readonly treeCount: number; readonly tree: number | 'all' } | null;
 	/** the direction that was asked last */
 	readonly alternative: Alternative;
 };
@@ -34,10 +35,11 @@ export function questionParts({ study, sharedSpecies, measure, trees, alternativ
 	const overlap: QuestionPart =
 		measure === null ? { text: 'niche overlap' } : { text: MEASURE_NAMES[measure], href: at('overlaps') };
 	if (trees === null) return [...across, overlap, { text: `${fall}?` }];
-	return [...across, overlap, { text: `${fall} on ` }, { text: treeWords(trees), href: at('materials') }, { text: '?' }];
+	return [...across, overlap, { text: `${fall} on ` }, { text: treesWords(trees), href: at('materials') }, { text: '?' }];
 }
 
-export function treeWords({ kind, count }: NonNullable<QuestionFacts['trees']>): string {
-	if (count === 1) return kind === 'summary' ? 'the summary tree' : 'one posterior tree';
-	return `${count.toLocaleString('en')} ${kind === 'summary' ? 'trees' : 'posterior trees'}`;
+/** In the words of the plan: a tree goes by its label there and here. */
+function treesWords({ label, treeCount, tree }: NonNullable<QuestionFacts['trees']>): string {
+	if (treeCount > 1 && tree === 'all') return `the ${treeCount.toLocaleString('en')} trees of “${label}”`;
+	return treeWords({ label, treeCount }, tree === 'all' ? 0 : tree);
 }

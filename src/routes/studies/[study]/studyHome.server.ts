@@ -55,7 +55,10 @@ function choicesOf({ trees, runs, plan }: Kept) {
 	const run = runs.find(({ id }) => id === plan?.overlapRun) ?? runs[0];
 	return {
 		measure: run?.measure ?? null,
-		trees: tree === undefined ? null : { kind: tree.kind, count: tree.treeCount },
+		trees:
+			tree === undefined
+				? null
+				: { label: tree.label, treeCount: tree.treeCount, tree: tree.id === plan?.treeSet ? plan.tree : ('all' as const) },
 		alternative: plan?.alternative ?? ('less' as const)
 	};
 }

@@ -1,3 +1,4 @@
+import { pageWords } from '#lib/analysis/words/pageWords.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Access } from '#lib/server/access.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
@@ -43,7 +44,7 @@ async function renew(access: Access, one: analyses.ListedAnalysis): Promise<stri
 		await startAnalysis(access, { ...one.plan, ...(await inForce(access, one)) });
 		return null;
 	} catch (thrown) {
-		if (thrown instanceof InputError || thrown instanceof Refusal) return thrown.message;
+		if (thrown instanceof InputError || thrown instanceof Refusal) return pageWords(thrown.message);
 		throw thrown;
 	}
 }

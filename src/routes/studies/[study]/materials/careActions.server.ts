@@ -1,3 +1,4 @@
+import { pageWords } from '#lib/analysis/words/pageWords.ts';
 import { error, fail, redirect } from '@sveltejs/kit';
 import {
 	confirmOf,
@@ -79,7 +80,7 @@ export async function settleMaterial({ params, request, locals }: RequestEvent) 
 		if (!settled) error(404, NOT_FOUND);
 	} catch (thrown) {
 		if (!(thrown instanceof InputError)) throw thrown;
-		return fail(422, { care: { ...care, message: thrown.message } });
+		return fail(422, { care: { ...care, message: pageWords(thrown.message) } });
 	}
 	redirect(303, pageOf(params.study));
 }
@@ -110,7 +111,7 @@ export async function correctMaterial({ params, request, locals }: RequestEvent)
 		redirect(303, pageOf(params.study, `?kept=${id}`));
 	} catch (thrown) {
 		if (!(thrown instanceof InputError)) throw thrown;
-		return fail(422, { care: { material: `matrix:${form.value.material.id}`, values: {}, message: thrown.message } });
+		return fail(422, { care: { material: `matrix:${form.value.material.id}`, values: {}, message: pageWords(thrown.message) } });
 	}
 }
 
@@ -148,7 +149,7 @@ async function renew(access: Access, { renewed }: Stale): Promise<string | null>
 		await startAnalysis(access, renewed);
 		return null;
 	} catch (thrown) {
-		if (thrown instanceof InputError || thrown instanceof Refusal) return thrown.message;
+		if (thrown instanceof InputError || thrown instanceof Refusal) return pageWords(thrown.message);
 		throw thrown;
 	}
 }

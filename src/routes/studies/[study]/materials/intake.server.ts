@@ -1,3 +1,4 @@
+import { pageWords } from '#lib/analysis/words/pageWords.ts';
 import { answersForm, keepForm, type Answers } from '#lib/contracts/materialForms.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Place } from '#lib/remarks/remark.ts';
@@ -54,7 +55,7 @@ function refusedBy(thrown: unknown, text: string, kind: Kind | null): Refused {
 	if (!(thrown instanceof InputError) && !(thrown instanceof Refusal)) throw thrown;
 	const where: Place | undefined = thrown instanceof InputError ? thrown.where : undefined;
 	return {
-		...{ kind: 'refused', readAs: kind, code: thrown.code, message: thrown.message },
+		...{ kind: 'refused', readAs: kind, code: thrown.code, message: pageWords(thrown.message) },
 		excerpt: excerpt(text, where, kind === 'matrix' ? 'cells' : 'signs'),
 		place: where?.line === undefined ? null : { line: where.line, column: kind === 'trees' ? (where.column ?? null) : null }
 	};

@@ -1,3 +1,4 @@
+import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import type { OverlapRunRequest } from '#lib/contracts/materials.ts';
 import { confirmOf, type Answers } from '#lib/contracts/materialForms.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
@@ -27,7 +28,7 @@ export async function lookAtMatrix(text: string, answers: Answers, given: Given)
 		kind: 'matrix',
 		headline: 'A matrix of species by species',
 		facts: [...matrixFactWords(overlapSummary(matrix)), shapeWords(reading)],
-		remarks,
+		remarks: pageRemarks(remarks),
 		questions: matrixQuestions(remarks, given),
 		wing: wingOf(matrix, [])
 	};

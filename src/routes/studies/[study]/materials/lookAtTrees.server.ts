@@ -1,3 +1,4 @@
+import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { treeSetRequestSchema, type TreeSetRequest } from '#lib/contracts/materials.ts';
 import { confirmOf, type Answers } from '#lib/contracts/materialForms.ts';
 import { TREE_TEXT_LIMIT_BYTES } from '#lib/server/api/bytes.ts';
@@ -29,7 +30,7 @@ export async function lookAtTrees(text: string, answers: Answers, given: Given):
 			...(isSeveral ? [treeKindWords(kind, treeCount)] : []),
 			...treeFactWords({ ...summary, ageUnit: answers.ageUnit ?? 'Ma' })
 		],
-		remarks,
+		remarks: pageRemarks(remarks),
 		questions: treeQuestions(isSeveral, remarks, given),
 		drawing: isDated ? await drawTree(text, burnIn, summary) : null
 	};

@@ -1,3 +1,4 @@
+import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { MaterialName } from '#lib/contracts/materialForms.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
@@ -41,7 +42,7 @@ type Uses = { readonly usedBy: (id: string) => number; readonly staleFor: (id: s
 async function keptTree(set: TreeSet, { usedBy, staleFor }: Uses) {
 	const { id, label, kind, treeCount, createdAt, remarks } = set;
 	return {
-		...{ kind: 'trees' as const, id, label, at: createdAt, remarks },
+		...{ kind: 'trees' as const, id, label, at: createdAt, remarks: pageRemarks(remarks) },
 		facts: [treeKindWords(kind, treeCount), ...treeFactWords(set)],
 		...{ usedBy: usedBy(id), stale: staleFor(id) },
 		questions: treeSettleQuestions(remarks, {}),
@@ -63,7 +64,7 @@ async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order
 	const remarks = printed?.run === id ? [printed.remark, ...run.remarks] : run.remarks;
 	const whole = await overlapRuns.find(access, id);
 	return {
-		...{ kind: 'matrix' as const, id, label, at: createdAt, remarks },
+		...{ kind: 'matrix' as const, id, label, at: createdAt, remarks: pageRemarks(remarks) },
 		facts: [
 			measure === 'other' ? 'another measure of overlap' : MEASURE_NAMES[measure],
 			counted(species.length, 'species', 'species'),

@@ -1,3 +1,4 @@
+import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { Access } from '#lib/server/access.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
@@ -28,7 +29,7 @@ export async function runPage(access: Access, run: OverlapRun, chosen: string | 
 			label,
 			at: createdAt,
 			measure: measure === 'other' ? 'another measure of overlap' : MEASURE_NAMES[measure],
-			remarks
+			remarks: pageRemarks(remarks)
 		},
 		figures: overlapFigures(species.length, lower),
 		reading: readingWords(reading),
