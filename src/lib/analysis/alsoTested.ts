@@ -2,7 +2,7 @@ import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { AlsoTested } from '#lib/contracts/resultBlocks.ts';
 import type { Alternative, Plan, Statistic } from '#lib/contracts/plan.ts';
 import { minimumP, type SharedNull } from '#lib/statistics/multiplicity/minimumP.ts';
-import type { PermutationDesign } from '#lib/statistics/permutationDesign.ts';
+import type { Functional } from '#lib/statistics/functionals.ts';
 import type { TailProbabilities } from '#lib/statistics/permutationPValue.ts';
 import type { PermutationOutcome } from '#lib/statistics/permutationTest.ts';
 
@@ -18,7 +18,7 @@ export function declaredStatistics({ statistic, alsoTest }: Pick<Plan, 'statisti
  * @returns nothing when the plan declares a single statistic
  */
 export function alsoTested(
-	design: PermutationDesign,
+	design: Counted,
 	outcome: PermutationOutcome,
 	plan: Plan
 ): Pick<AnalysisResult['permutation'], 'pAdjusted' | 'also'> {
@@ -32,7 +32,10 @@ export function alsoTested(
 	return main === undefined ? {} : { pAdjusted: main.pAdjusted, also: others };
 }
 
-function sharedNull({ functionals }: PermutationDesign, { free }: PermutationOutcome, statistic: Statistic): SharedNull {
+/** A design, or what a test over all trees has counted. */
+type Counted = { readonly functionals: readonly Pick<Functional, 'statistic' | 'observed' | 'tie'>[] };
+
+function sharedNull({ functionals }: Counted, { free }: PermutationOutcome, statistic: Statistic): SharedNull {
 	const functional = functionals.find((each) => each.statistic === statistic);
 	const values = free.values[statistic];
 	if (functional === undefined || values === undefined) throw new Error(`The shuffles of ${statistic} were not kept.`);

@@ -134,12 +134,6 @@ describe('analyse, in general', () => {
 });
 
 describe('analyse, on materials that do not allow it', () => {
-	it('asks which of several trees', () => {
-		expect(refusal({ treeText: `${MICRO_INPUTS.treeText}\n${MICRO_INPUTS.treeText}` }, microPlan({ tree: 'all' }))).toBe(
-			'choose-a-tree: The tree set holds 2 trees. Choose one by its index, 0 to 1; a test over all of them is not available yet.'
-		);
-	});
-
 	it('says that there is no such tree', () => {
 		expect(refusal({}, microPlan({ tree: 3 }))).toBe(
 			'no-such-tree: The tree set holds 1 tree, counted from 0; there is no tree 3.'

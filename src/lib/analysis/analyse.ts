@@ -11,7 +11,7 @@ import { mantelMoments } from '#lib/statistics/mantelMoments.ts';
 import { nodeAverages } from '#lib/statistics/nodeAverages.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
-import { permutationTest } from '#lib/statistics/permutationTest.ts';
+import { type PermutationOutcome, permutationTest } from '#lib/statistics/permutationTest.ts';
 import { alsoTested, declaredStatistics } from './alsoTested.ts';
 import { resultBlocks } from './blocks/resultBlocks.ts';
 import { findingOf } from './findingOf.ts';
@@ -21,9 +21,10 @@ import { plateData } from './plateData.ts';
 import { prepareAnalysis, type PreparedAnalysis } from './prepareAnalysis.ts';
 import { progressReporter } from './progressReporter.ts';
 import { refuseAgeZero } from './refuseAgeZero.ts';
+import { judgeOverTrees } from './trees/judgeOverTrees.ts';
 
 /** Changes whenever a published number could change; printed in every report. */
-export const ENGINE = { version: '1.0.0', kernel: 'typescript-blocks' } as const;
+export const ENGINE = { version: '1.0.0', kernel: 'webassembly-blocks' } as const;
 
 export type Report = (progress: AnalysisProgress) => void;
 
@@ -40,13 +41,17 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 	const lower = { ages: lowerTriangle(pairAges, species.length), overlaps: lowerTriangle(response, species.length) };
 	const line = pick(linearRegression(lower.ages, lower.overlaps));
 
-	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	const statistics = declaredStatistics(plan);
+	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response, statistics });
 	refuseAgeZero(design, plan);
-	const onProgress = report && progressReporter({ plan, regression: line, lower, report });
+	const reporter = report && progressReporter({ plan, regression: line, lower, report });
+	const overTrees = judgeOverTrees({ prepared, plan, design, onProgress: reporter });
+	const onProgress = overTrees?.onProgress ?? reporter;
 	const outcome = permutationTest(design, {
 		permutations: plan.permutations,
 		seed: plan.seed,
-		keep: [...new Set(['nodes-plain', ...declaredStatistics(plan)] as const)],
+		keep: [...new Set(['nodes-plain', ...statistics] as const)],
+		withinStatistics: statistics,
 		...(onProgress ? { onProgress } : {})
 	});
 
@@ -54,7 +59,10 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 	const averages = nodeAverages({ parent: tree.parent, ages }, response);
 	const compared = describeCompared(prepared, inputs, plan, lower.overlaps);
 	const mantelStatistics = mantel(lower.ages, lower.overlaps);
-	const permutation = describePermutation({ prepared, design, outcome, plan, moments, pairAges: lower.ages });
+	const judged = overTrees?.outcome ?? outcome;
+	const described = describePermutation({ prepared, design, outcome: judged, plan, moments, pairAges: lower.ages });
+	const permutation = overTrees?.permutationOf(described) ?? described;
+	const trees = overTrees?.blockOf(permutation);
 	return {
 		compared,
 		species: species.length,
@@ -62,16 +70,18 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 		dropped: [...prepared.dropped],
 		remarks: [...prepared.remarks],
 		regression: line,
-		permutation: { ...permutation, ...alsoTested(design, outcome, plan) },
+		permutation: { ...permutation, ...alsoTested(overTrees?.outcome ?? design, judged, plan) },
 		mantel: mantelStatistics,
 		nodeAverages: {
 			nodes: nodeRows(prepared, averages),
-			nested: { ...averages.nested, ...tails(outcome.free.statistics['nodes-nested']) },
-			plain: { ...averages.plain, ...tails(outcome.free.statistics['nodes-plain']) }
+			nested: { ...averages.nested, ...nodeTails(outcome, 'nodes-nested') },
+			plain: { ...averages.plain, ...nodeTails(outcome, 'nodes-plain') }
 		},
+		...(trees === undefined ? {} : { trees }),
 		...resultBlocks({ inputs, plan, prepared, design, outcome, regression: line, pairAges, lower }),
 		finding: findingOf({
 			compared,
+			trees,
 			permutation,
 			regression: line,
 			moments,
@@ -111,6 +121,11 @@ function pick({ residualStandardDeviation, ...line }: LinearRegression): Analysi
 	if (residualStandardDeviation === null) throw new Error('Four species or more give six pairs: the residuals have a spread.');
 	const { slope, intercept, r, rSquared } = line;
 	return { slope, intercept, r, rSquared, residualStandardDeviation };
+}
+
+function nodeTails({ free }: PermutationOutcome, statistic: 'nodes-nested' | 'nodes-plain') {
+	const interceptTails = tails(free.statistics[`${statistic}-intercept`]);
+	return { ...tails(free.statistics[statistic]), interceptTails };
 }
 
 function tails(tested: { pLess: number; pGreater: number; pTwoSided: number } | undefined) {

@@ -7,6 +7,7 @@ import { findFinding } from './words/finding.ts';
 const FEWEST_FOR_MOMENTS = 10;
 
 type Computed = Pick<AnalysisResult, 'compared' | 'permutation' | 'regression' | 'species'> & {
+	readonly trees?: AnalysisResult['trees'] | undefined;
 	readonly moments: Moments;
 	readonly z: number;
 	readonly ages: Float64Array;
@@ -14,7 +15,7 @@ type Computed = Pick<AnalysisResult, 'compared' | 'permutation' | 'regression' |
 };
 
 /** The finding that computed numbers license. */
-export function findingOf({ compared, permutation, regression, species, moments, z, ages, parent }: Computed): Finding {
+export function findingOf({ compared, permutation, regression, species, moments, z, ages, parent, trees }: Computed): Finding {
 	return findFinding({
 		measure: compared.measure,
 		ageUnit: compared.ageUnit,
@@ -28,9 +29,12 @@ export function findingOf({ compared, permutation, regression, species, moments,
 		rootAge: compared.rootAge,
 		nodeAges: internalAges(ages, parent),
 		permutation,
-		momentP: momentP(moments, z, species),
+		// The closed form speaks of one tree only.
+		momentP: trees === undefined ? momentP(moments, z, species) : null,
 		transformed: compared.transform !== 'none',
-		polytomies: compared.polytomies
+		polytomies: compared.polytomies,
+		treesInSet: compared.tree.treesInSet,
+		trees
 	});
 }
 

@@ -6,11 +6,13 @@ import { distinctAges } from '#lib/statistics/distinctAges.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
 import { isExact } from '#lib/statistics/permutationTest.ts';
+import { declaredStatistics } from './alsoTested.ts';
 import { smallestFreeP } from './attainable.ts';
 import { cladeGroups } from './cladeGroups.ts';
 import { nicheTraits } from './nicheTraits.ts';
 import { prepareAnalysis } from './prepareAnalysis.ts';
 import { refuseAgeZero } from './refuseAgeZero.ts';
+import { previewOverTrees } from './trees/previewOverTrees.ts';
 
 /**
  * What an analysis would use and could at best say, without running it.
@@ -20,7 +22,11 @@ export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPre
 	const prepared = prepareAnalysis(inputs, plan);
 	const { tree, ages, species, response, dropped, remarks } = prepared;
 	nicheTraits(prepared, inputs, plan);
-	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response });
+	const design = preparePermutation({
+		tree: { parent: tree.parent, ages },
+		overlap: response,
+		statistics: declaredStatistics(plan)
+	});
 	refuseAgeZero(design, plan);
 	cladeGroups(prepared, plan);
 	const exact = isExact(design, false, plan.permutations);
@@ -35,6 +41,7 @@ export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPre
 		rootPairShare: design.rootPairShare,
 		smallestP: Math.min(1, sides * smallestFreeP(tree, ages, design, { exact, shuffles: plan.permutations })),
 		exact,
-		remarks
+		remarks,
+		...previewOverTrees(prepared, plan)
 	};
 }

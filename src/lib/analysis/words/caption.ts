@@ -56,9 +56,15 @@ function tailP(
 
 function notes(result: AnalysisResult): string {
 	const lines: string[] = [];
+	if (result.trees !== undefined) lines.push(treesNote(result.trees, result.compared.tree));
 	if (result.dropped.length > 0) lines.push(`Left out: ${result.dropped.map((entry) => entry.name).join(', ')}.`);
 	if (result.compared.polytomies > 0) lines.push(`Unresolved nodes: ${result.compared.polytomies}.`);
 	if (result.compared.levelled) lines.push('Tips were levelled by extending terminal branches.');
 	if (result.compared.transform === 'logit') lines.push('Overlap on the logit scale.');
 	return lines.join(' ');
+}
+
+function treesNote({ count }: { count: number }, { index, name }: AnalysisResult['compared']['tree']): string {
+	const drawn = name === '' ? `tree ${index + 1} of the set` : `tree “${name}”`;
+	return `The test averages over ${formatCount(count)} trees; drawn are ${drawn}, its line and its shuffles.`;
 }

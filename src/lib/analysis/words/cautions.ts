@@ -1,6 +1,7 @@
 import type { Finding, FindingKind } from '#lib/contracts/analysisResult.ts';
 import type { FindingFacts } from './findingFacts.ts';
 import { formatAge, formatCount, formatFixed, formatShare } from './numbers.ts';
+import { treeCautions } from './treeCautions.ts';
 import { unitWords } from './units.ts';
 
 type Caution = Finding['cautions'][number];
@@ -144,5 +145,6 @@ const rules: readonly Rule[] = [
 
 /** A caution for every pitfall that is present in these data. */
 export function findCautions(kind: FindingKind, facts: FindingFacts): Caution[] {
-	return rules.map((rule) => rule(facts, kind)).filter((caution): caution is Caution => caution !== null);
+	const ofTest = rules.map((rule) => rule(facts, kind)).filter((caution): caution is Caution => caution !== null);
+	return [...ofTest, ...treeCautions(facts)];
 }

@@ -2,6 +2,7 @@ import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { AgeUnit } from '#lib/contracts/materials.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Alternative } from '#lib/contracts/plan.ts';
+import type { TreesBlock } from '#lib/contracts/resultBlocks.ts';
 
 /** What the words of a finding are chosen from: numbers already computed, and the plan's question. */
 export type FindingFacts = {
@@ -22,4 +23,8 @@ export type FindingFacts = {
 	readonly momentP: number | null;
 	readonly transformed: boolean;
 	readonly polytomies: number;
+	/** trees of the set, used or not */
+	readonly treesInSet?: number;
+	/** when the test averages over all of them */
+	readonly trees?: TreesBlock | undefined;
 };

@@ -29,7 +29,8 @@ function opening(facts: FindingFacts): SentencePart[] {
 
 function shuffleSentence(facts: FindingFacts): SentencePart[] {
 	const { permutation } = facts;
-	const verb = STATISTIC_WORDS[permutation.statistic].asExtreme[facts.alternative];
+	const averaged = facts.trees === undefined ? '' : `, averaged over ${formatCount(facts.trees.count)} trees`;
+	const verb = `${STATISTIC_WORDS[permutation.statistic].asExtreme[facts.alternative]}${averaged}`;
 	if (permutation.exact) {
 		const count = `${formatCount(permutation.asExtreme)} of all ${formatCount(permutation.count)}`;
 		return [

@@ -2,9 +2,9 @@ import { identityArrangement, type Group } from '../arrangements.ts';
 import { denseSumsOfBatch } from '../denseSums.ts';
 import { midRanks } from '../midRanks.ts';
 import { lowerTriangle, symmetricMatrix } from '../pairValues.ts';
-import type { PermutationStatistic } from '../permutationDesign.ts';
+import type { Functional, PermutationStatistic } from '../functionals.ts';
 import { permutationPValue } from '../permutationPValue.ts';
-import type { NullOutcome, TestedStatistic } from '../permutationTest.ts';
+import type { NullOutcome, PermutationOutcome, TestedStatistic } from '../permutationTest.ts';
 import { STREAM_DOMAIN } from '../randomStream.ts';
 import { plannedArrangements, shuffleBatches, type ShuffleQuestion } from '../shuffleBatches.ts';
 import type { TailCounts } from '../tally.ts';
@@ -28,19 +28,17 @@ export type AveragedQuestion = {
 
 export type AveragedProgress = {
 	readonly question: 'free' | 'within';
-	/** arrangements of this question, so far */
+	/** arrangements of this question, so far, and of the one before it */
 	readonly done: number;
+	readonly before: number;
+	/** arrangements of both questions together */
+	readonly total: number;
 	readonly counts: Readonly<Partial<Record<PermutationStatistic, TailCounts>>>;
 };
 
-export type AveragedOutcome = {
-	readonly free: NullOutcome;
-	/** species move within the sides of the commonest root split only; null when no side holds two species */
-	readonly within: NullOutcome | null;
-	/** species on each side of the commonest root split, by its first row */
-	readonly sides: readonly number[];
-	/** share of all pairs that stand across that split */
-	readonly acrossShare: number;
+export type AveragedOutcome = PermutationOutcome & {
+	/** what was counted; arrangements as close as `tie` to the observed one tie with it */
+	readonly functionals: readonly Pick<Functional, 'statistic' | 'observed' | 'tie'>[];
 };
 
 /**
@@ -62,16 +60,30 @@ export function averagedTest(question: AveragedQuestion): AveragedOutcome {
 	const inside = groupsOf(sizes).filter(({ from, to }) => to - from > 1);
 	const all = (tipCount * (tipCount - 1)) / 2;
 	const alone = sizes.reduce((pairs, size) => pairs + (size * (size - 1)) / 2, 0);
-	const free = ask(question, { name: 'free', groups: [{ from: 0, to: tipCount }], order: identityArrangement(tipCount) });
-	return {
-		free,
-		within: inside.length === 0 ? null : ask(question, { name: 'within', groups: inside, order }),
-		sides: sizes,
-		acrossShare: (all - alone) / all
-	};
+	const everywhere = [{ from: 0, to: tipCount }];
+	const { permutations } = question;
+	const before = plannedArrangements({ groups: everywhere, permutations }).count;
+	const total = before + (inside.length === 0 ? 0 : plannedArrangements({ groups: inside, permutations }).count);
+	const inTreeOrder = identityArrangement(tipCount);
+	const { counted, ...free } = ask(question, { name: 'free', groups: everywhere, order: inTreeOrder, before: 0, total });
+	const functionals = counted.map(({ statistic, observed, tie, scale }) => ({
+		statistic,
+		observed: observed * scale,
+		tie: tie * scale
+	}));
+	if (inside.length === 0) return { free, within: null, functionals };
+	const { exact, count, statistics, values } = ask(question, { name: 'within', groups: inside, order, before, total });
+	const rootPairShare = (all - alone) / all;
+	return { free, within: { exact, count, statistics, values, sides: sizes, rootPairShare }, functionals };
 }
 
-type Asked = { readonly name: 'free' | 'within'; readonly groups: readonly Group[]; readonly order: Int32Array };
+type Asked = {
+	readonly name: 'free' | 'within';
+	readonly groups: readonly Group[];
+	readonly order: Int32Array;
+	readonly before: number;
+	readonly total: number;
+};
 
 /** One statistic made ready for counting: two matrices whose rows stand in the order of the question. */
 type Counted = {
@@ -86,7 +98,10 @@ type Counted = {
 	readonly values: Float64Array;
 };
 
-function ask(asking: AveragedQuestion, { name, groups, order }: Asked): NullOutcome {
+function ask(
+	asking: AveragedQuestion,
+	{ name, groups, order, before, total }: Asked
+): NullOutcome & { readonly counted: readonly Counted[] } {
 	const { tipCount, permutations, seed, gathered, onProgress } = asking;
 	const planned = plannedArrangements({ groups, permutations });
 	const domain = name === 'free' ? STREAM_DOMAIN.free : STREAM_DOMAIN.within;
@@ -96,7 +111,7 @@ function ask(asking: AveragedQuestion, { name, groups, order }: Asked): NullOutc
 	for (const batch of shuffleBatches(question)) {
 		for (const one of counted) countInPlace(one, tipCount, batch);
 		done += batch.count;
-		onProgress?.({ question: name, done, counts: countsOf(counted) });
+		onProgress?.({ question: name, done, before, total, counts: countsOf(counted) });
 	}
 	const statistics: Partial<Record<PermutationStatistic, TestedStatistic>> = {};
 	const values: Partial<Record<PermutationStatistic, Float64Array>> = {};
@@ -105,7 +120,7 @@ function ask(asking: AveragedQuestion, { name, groups, order }: Asked): NullOutc
 		statistics[statistic] = { observed: observed * scale, ...counts, ...permutationPValue(counts, done, planned.exact) };
 		values[statistic] = drawn.map((value) => value * scale);
 	}
-	return { exact: planned.exact, count: done, statistics, values };
+	return { exact: planned.exact, count: done, statistics, values, counted };
 }
 
 function counting(

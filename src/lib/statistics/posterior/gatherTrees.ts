@@ -1,6 +1,6 @@
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { AgedTree } from '../agedTree.ts';
-import type { PermutationStatistic } from '../permutationDesign.ts';
+import type { PermutationStatistic } from '../functionals.ts';
 import { type CladeAge, cladeAges, cladeCollector, collectCladesInPlace } from './cladeAges.ts';
 import { nodeScores } from './nodeScores.ts';
 import { addPairWeightsInPlace, foldPairsInPlace } from './pairWeights.ts';

@@ -1,6 +1,6 @@
 import { InputError } from '#lib/remarks/inputError.ts';
 import { midRanksOfRepeated } from '../midRanks.ts';
-import type { PermutationStatistic } from '../permutationDesign.ts';
+import type { PermutationStatistic } from '../functionals.ts';
 import type { LaidTree } from './posteriorTree.ts';
 
 /** How far each node of a tree stands from the mean, free of the unit and the spread of its ages. */

@@ -1,4 +1,4 @@
-import type { PermutationStatistic } from '../permutationDesign.ts';
+import type { PermutationStatistic } from '../functionals.ts';
 import { LAID_BLOCK_WIDTH, type LaidTree } from './posteriorTree.ts';
 
 type Scored = { readonly statistic: PermutationStatistic; readonly scores: Float64Array };
