@@ -1,5 +1,5 @@
+import { ALL_DIAMONDS_UP_TO, LARGEST_DIAMONDS } from '#lib/contracts/drawnPlate.ts';
 import { markHeight, type OverlapAxis } from './overlapAxis.ts';
-import { ALL_DIAMONDS_UP_TO, LARGEST_DIAMONDS } from './pairColumns.ts';
 import type { PlateModel, PlateNode } from './plateModel.ts';
 
 export type Diamond = {

@@ -1,12 +1,8 @@
+import { ALL_DIAMONDS_UP_TO, DOTS_AT_MOST } from '#lib/contracts/drawnPlate.ts';
 import { markHeight, overlapBins, rampShare, type OverlapAxis } from './overlapAxis.ts';
 import { eachPairAcross, pairPlace, type PlateModel, type PlateNode } from './plateModel.ts';
 import { swarm } from './swarm.ts';
 
-/** Up to so many pairs stand as dots, more as a strip. */
-export const DOTS_AT_MOST = 12;
-/** Above so many nodes only the largest diamonds are drawn. */
-export const ALL_DIAMONDS_UP_TO = 60;
-export const LARGEST_DIAMONDS = 20;
 const SAME_PLACE = 0.75;
 
 export type PairDot = {

@@ -1,4 +1,5 @@
 import type { AnalysisResult, PlateData } from '#lib/contracts/analysisResult.ts';
+import type { NodeAverage } from '#lib/contracts/drawnPlate.ts';
 
 type Line = { readonly slope: number; readonly intercept: number };
 
@@ -15,8 +16,6 @@ export type PlateInput = {
 	/** null while nothing has been shuffled to the end */
 	readonly permutation: Pick<AnalysisResult['permutation'], 'count' | 'exact'> | null;
 };
-
-export type NodeAverage = 'nested' | 'plain';
 
 /** Rows `from` to `to - 1` of the names, top to bottom. */
 export type RowRange = { readonly from: number; readonly to: number };

@@ -1,3 +1,4 @@
+import type { NodeAverage } from '#lib/contracts/drawnPlate.ts';
 import { ageScale, ageSpacing, ageTicks, tickTexts, type AgeScale, type AgeSpacing } from './ageScale.ts';
 import { agedLinePath, type AgedLine, type LineFrame } from './agedLine.ts';
 import { endsScene, type EndsScene } from './endsScene.ts';
@@ -6,7 +7,7 @@ import { nodeDiamonds, type Diamond } from './nodeDiamonds.ts';
 import { overlapAxis, overlapBins, rampShare, type OverlapAxis, type OverlapBin } from './overlapAxis.ts';
 import { columnSizes, pairColumns, type ColumnSizes, type PairColumns } from './pairColumns.ts';
 import { ageRange, nameSizeOf, plateLayout, TYPE, type AgeDirection, type PlateLayout } from './plateLayout.ts';
-import { pairPlace, plateModel, type NodeAverage, type PlateInput, type PlateModel } from './plateModel.ts';
+import { pairPlace, plateModel, type PlateInput, type PlateModel } from './plateModel.ts';
 import { figureNames } from './speciesNames.ts';
 import { treeInk, treeLayout, type TreeInk, type TreePlace } from './treeLayout.ts';
 import { wingInk, type WingInk } from './wingGeometry.ts';

@@ -1,4 +1,5 @@
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
+import { ALL_DIAMONDS_UP_TO, DOTS_AT_MOST, drawnAverage, LARGEST_DIAMONDS } from '#lib/contracts/drawnPlate.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import { formatCount, formatFixed, formatP, formatSlope } from './numbers.ts';
 import { unitWords } from './units.ts';
@@ -10,16 +11,32 @@ export function writeCaption(result: AnalysisResult): string {
 
 function panels(result: AnalysisResult): string {
 	const measure = MEASURE_NAMES[result.compared.measure];
-	const age = ageWords(result);
 	return [
 		`Niche overlap and shared ancestry in ${formatCount(result.species)} species.`,
 		`(a) ${measure} of every pair, folded against the names.`,
-		`(b) Dated tree; ${age}.`,
+		`(b) Dated tree; ${ageWords(result)}.`,
 		'(c) All overlaps; its colours are the key to a and d.',
-		`(d) Overlap against age of the most recent common ancestor, one column of pairs under each node (strips: width by the square root of the number of pairs); diamonds, means across a node (weighted by branching);`,
+		`(d) Overlap against age of the most recent common ancestor, one column of pairs under each node${stripWords(result)}; ${diamondWords(result)};`,
 		'coloured line, all pairs; dashed, node means; grey lines, all pairs after shuffling the species among the tips.',
-		'(e) Where the shuffled lines end at the root, and where the observed line does.'
+		endsWords(result)
 	].join(' ');
+}
+
+function stripWords({ nodeAverages }: AnalysisResult): string {
+	const any = nodeAverages.nodes.some(({ pairs }) => pairs > DOTS_AT_MOST);
+	return any ? ' (strips: width by the square root of the number of pairs)' : '';
+}
+
+function diamondWords(result: AnalysisResult): string {
+	const { nodes } = result.nodeAverages;
+	const which = nodes.length > ALL_DIAMONDS_UP_TO ? `the ${LARGEST_DIAMONDS} nodes with most pairs` : 'a node';
+	const how = { nested: 'weighted by branching', plain: 'every pair equal' }[drawnAverage(result)];
+	return `diamonds, means across ${which} (${how})`;
+}
+
+function endsWords({ permutation }: AnalysisResult): string {
+	const lines = permutation.exact ? `the lines of all ${formatCount(permutation.count)} relabellings` : 'the shuffled lines';
+	return `(e) Where ${lines} end at the root, and where the observed line does.`;
 }
 
 function ageWords(result: AnalysisResult): string {

@@ -1,6 +1,7 @@
 import type { z } from 'zod';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { plateQuerySchema } from '#lib/contracts/answers.ts';
+import { drawnAverage } from '#lib/contracts/drawnPlate.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { FigureSettings as SavedSettings } from '#lib/contracts/report.ts';
 import type { Access } from '#lib/server/access.ts';
@@ -50,6 +51,7 @@ export function plateSettings(
 	return {
 		measureName: MEASURE_NAMES[result.compared.measure],
 		ageUnit: result.compared.ageUnit,
+		average: drawnAverage(result),
 		...(widthMm === undefined ? {} : { widthMm }),
 		...(dpi === undefined ? {} : { dpi }),
 		...(age === undefined ? {} : { ageDirection: age === 'left' ? 'present-left' : 'present-right' }),

@@ -1,6 +1,6 @@
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { AgeDirection } from '#lib/figures/plateLayout.ts';
-import type { NodeAverage } from '#lib/figures/plateModel.ts';
+import type { NodeAverage } from '#lib/contracts/drawnPlate.ts';
 import type { PaletteName } from '#lib/figures/palette.ts';
 import type { AgeUnit } from '#lib/figures/plateText.ts';
 
