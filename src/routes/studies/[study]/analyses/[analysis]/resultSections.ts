@@ -1,4 +1,5 @@
 import type { Component } from 'svelte';
+import { ALSO_TESTED, CLADES, SISTERS } from './cladeSections.ts';
 import { nodeSentence } from './nodeSentence.ts';
 import type { Findings } from './findingsView.ts';
 
@@ -25,7 +26,10 @@ export const RESULT_SECTIONS: readonly ResultSection[] = [
 		title: 'Node averages',
 		sentence: nodeSentence,
 		load: () => import('./sections/NodeAverages.svelte')
-	}
+	},
+	ALSO_TESTED,
+	CLADES,
+	SISTERS
 ];
 
 /** The parts that a result holds. */
