@@ -51,6 +51,7 @@ const ROWS: Readonly<Record<string, Row>> = {
 	'plate.png': { method: 'GET', path: ({ analysis }) => `/analyses/${analysis}/plate.png?dpi=72`, lowest: 'reader' },
 	'pairs.csv': { method: 'GET', path: ({ analysis }) => `/analyses/${analysis}/pairs.csv`, lowest: 'reader' },
 	'nodes.csv': { method: 'GET', path: ({ analysis }) => `/analyses/${analysis}/nodes.csv`, lowest: 'reader' },
+	'clades.csv': { method: 'GET', path: ({ analysis }) => `/analyses/${analysis}/clades.csv`, lowest: 'reader' },
 	'new report': {
 		method: 'POST',
 		path: ({ analysis }) => `/analyses/${analysis}/reports`,

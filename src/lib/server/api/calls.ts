@@ -265,6 +265,14 @@ export const CALLS: readonly Call[] = [
 		refusals: [422]
 	},
 	{
+		...reading,
+		path: '/analyses/{analysis}/clades.csv',
+		id: 'listClades',
+		does: 'Every clade that the plan asked about, with both p-values; the headings alone where it asked about none.',
+		answers: [{ status: 200, means: 'The table', content: file('text/csv') }],
+		refusals: [422]
+	},
+	{
 		method: 'post',
 		path: '/analyses/{analysis}/reports',
 		id: 'createReport',
