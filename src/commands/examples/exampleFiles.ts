@@ -9,6 +9,7 @@ import { homeDistances } from './homeDistance.ts';
 import { messyFiles, type ExampleFile } from './messyFiles.ts';
 import { MOSS_BEETLE_COLLECTING, MOSS_BEETLE_SEED, mossBeetleNiches, mossBeetleTree } from './mossBeetles.ts';
 import { README } from './readme.ts';
+import { positionText } from './positionText.ts';
 import { recordText } from './recordText.ts';
 import { makeStudy, type Study } from './study.ts';
 import { gridText, squareText } from './tableText.ts';
@@ -36,6 +37,7 @@ export function exampleFiles(): ExampleFile[] {
 			text: gridText(map)
 		})),
 		{ path: 'lanternfrogs/records.csv', text: recordText(frogs, terrain, 'LF') },
+		{ path: 'lanternfrogs/positions.csv', text: positionText(frogs, terrain) },
 		{ path: 'lanternfrogs/distance-km.csv', text: squareText(frogs.species, distancesOf(frogs), DISTANCE_DECIMALS) },
 		{ path: 'lanternfrogs/truth.json', text: lanternfrogTruth(frogs, terrain) },
 		...studyFiles('moss-beetles', beetles),

@@ -24,6 +24,8 @@ lanternfrogs/            26 species whose niches changed along the tree
   maps/*.asc             one suitability map a species, 0 to 1, intensities
   records.csv            30 to 90 records a species under Darwin Core names, with
                          temperature and rainfall of their cells
+  positions.csv          mean climate of the records with its standard error,
+                         breadth and number of records, one row a species
   distance-km.csv        km between the middles of the species' records, a covariate
   truth.json             what all this was made from: seed, rates, true niches
 
