@@ -2,6 +2,7 @@ import type { ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/
 import { matrixFromBody, readMatrix } from '#lib/overlap/readMatrix.ts';
 import { readNicheTable } from '#lib/overlap/readNicheTable.ts';
 import { analyse } from './analyse.ts';
+import { readCovariateMaterial } from './covariates/readCovariateMaterial.ts';
 import { previewAnalysis } from './previewAnalysis.ts';
 import { pairAges, readTreeFacts, treeStructure } from './readTreeFacts.ts';
 
@@ -17,6 +18,7 @@ export const computeTasks: Handlers = {
 	readTrees: ({ text, confirm }) => readTreeFacts(text, confirm),
 	readMatrix: ({ measure, confirm, csv, matrix }) =>
 		matrix === undefined ? readMatrix(csv ?? '', { measure, confirm }) : matrixFromBody(matrix, { measure, confirm }),
+	readCovariate: (given) => readCovariateMaterial(given),
 	readNicheTable: ({ csv, roles }) => readNicheTable(csv, roles),
 	treeStructure: ({ text, tree, spreadConfirmed }) => treeStructure(text, tree, spreadConfirmed),
 	mrcaAges: ({ text, tree, spreadConfirmed, species }) =>

@@ -1,17 +1,9 @@
-import type { CovariateReadingNotes, CovariateRequest } from '#lib/contracts/covariates.ts';
+import type { CovariateReading } from '#lib/contracts/compute.ts';
+import type { CovariateRequest } from '#lib/contracts/covariates.ts';
 import { covariateFromBody, readCovariate, type CovariateMatrix } from '#lib/overlap/readCovariate.ts';
 import { readPlaces } from '#lib/overlap/readPlaces.ts';
-import type { Remark } from '#lib/remarks/remark.ts';
 import { greatCircleDistances, sphericalCentroid } from '#lib/statistics/covariates/greatCircle.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
-
-export type CovariateReading = {
-	readonly species: readonly string[];
-	/** strict lower triangle, row by row; NaN where a pair is missing */
-	readonly lower: Float64Array;
-	readonly reading: CovariateReadingNotes;
-	readonly remarks: readonly Remark[];
-};
 
 /**
  * A covariate from what a person or a script brings: a matrix as text or numbers, or a table of places from which the
