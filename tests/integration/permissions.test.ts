@@ -4,7 +4,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { Role, SignedInUser } from '#lib/contracts/user.ts';
 import { ACTIONS, type AccessObject, type Action } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
-import { analyses, logEntries, studies } from '#lib/server/db/schema.ts';
+import { analyses, logEntries, reports, studies } from '#lib/server/db/schema.ts';
 import { can } from '#lib/server/permissions.ts';
 import * as labs from '#lib/server/repositories/labs.ts';
 import * as logBook from '#lib/server/repositories/logBook.ts';
@@ -111,6 +111,51 @@ describe('can, on a study and everything in it', () => {
 			action: 'access.refused',
 			userId: person('reader')?.id,
 			detail: { tried: 'signOff', report: study.report }
+		});
+	});
+});
+
+// Decision 0014. The filled study has one analysis on its materials and one report on the analysis.
+describe('can, on what an analyst made', () => {
+	const PARTS = ['treeSet', 'overlapRun', 'analysis', 'report'] as const;
+	const own = () => fillStudy({ lab, createdBy: person('analyst')?.id ?? '' });
+	const remove = async (table: typeof analyses | typeof reports, id: string) =>
+		db().update(table).set({ deletedAt: new Date() }).where(eq(table.id, id));
+	const mayDelete = async (filled: FilledStudy, who: Who = 'analyst') =>
+		Promise.all(PARTS.map((kind) => answer(who, 'delete', objectIn(filled, kind))));
+
+	it('lets them delete it once nothing that stands rests on it', async () => {
+		const filled = await own();
+		expect(await mayDelete(filled)).toEqual([403, 403, 403, 'yes']);
+		await remove(reports, filled.report);
+		expect(await mayDelete(filled)).toEqual([403, 403, 'yes', 404]);
+		await remove(analyses, filled.analysis);
+		expect(await mayDelete(filled)).toEqual(['yes', 'yes', 404, 404]);
+	});
+
+	it('lets them bring back what they made, and a lead everything', async () => {
+		const filled = await own();
+		await remove(reports, filled.report);
+		expect(await answer('analyst', 'restore', { report: filled.report })).toBe('yes');
+		expect(await answer('lead', 'restore', { report: filled.report })).toBe('yes');
+		expect(await answer('reader', 'restore', { report: filled.report })).toBe(403);
+	});
+
+	it('keeps the study itself, and what others made, for a lead', async () => {
+		const filled = await own();
+		expect(await answer('analyst', 'delete', { study: filled.study })).toBe(403);
+		expect(await answer('analyst', 'delete', { report: study.report })).toBe(403);
+		expect(await mayDelete(filled, 'lead')).toEqual(['yes', 'yes', 'yes', 'yes']);
+	});
+
+	it('gives nothing to somebody who is only a reader now', async () => {
+		const filled = await fillStudy({ lab, createdBy: person('reader')?.id ?? '' });
+		expect(await answer('reader', 'delete', { report: filled.report })).toBe(403);
+	});
+
+	it('says in the refusal what an analyst may delete', async () => {
+		await expect(can(person('analyst'), 'delete', { report: study.report })).rejects.toMatchObject({
+			body: { message: expect.stringContaining('what you made yourself, as long as nothing rests on it') }
 		});
 	});
 });

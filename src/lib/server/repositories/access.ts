@@ -2,7 +2,17 @@ import { and, eq, isNull, type SQL } from 'drizzle-orm';
 import type { Role } from '#lib/contracts/user.ts';
 import type { AccessObject } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
-import { analyses, covariates, labs, memberships, nicheTables, overlapRuns, reports, studies, treeSets } from '#lib/server/db/schema.ts';
+import {
+	analyses,
+	covariates,
+	labs,
+	memberships,
+	nicheTables,
+	overlapRuns,
+	reports,
+	studies,
+	treeSets
+} from '#lib/server/db/schema.ts';
 
 /** Where an object is, and what the asking person is there. */
 export type Place = {
@@ -10,6 +20,8 @@ export type Place = {
 	readonly studyId: string | null;
 	/** null when the person is no member, or nobody is signed in */
 	readonly role: Role | null;
+	/** who made a part of a study; null for a lab and for a study, which is the lab’s */
+	readonly madeBy: string | null;
 	readonly isExample: boolean;
 	readonly isDeleted: boolean;
 };
@@ -22,7 +34,14 @@ type Asking = {
 type StudyPart = Exclude<AccessObject, { readonly account: string } | { readonly lab: string }>;
 
 /** The tables whose rows belong to a study. */
-const PARTS = { treeSet: treeSets, overlapRun: overlapRuns, covariate: covariates, nicheTable: nicheTables, analysis: analyses, report: reports };
+const PARTS = {
+	treeSet: treeSets,
+	overlapRun: overlapRuns,
+	covariate: covariates,
+	nicheTable: nicheTables,
+	analysis: analyses,
+	report: reports
+};
 
 export async function find(object: Exclude<AccessObject, { readonly account: string }>, asking: Asking): Promise<Place | null> {
 	if ('lab' in object) return findLab(object.lab, asking.user);
@@ -37,7 +56,7 @@ async function findLab(lab: string, user: string | null): Promise<Place | null> 
 		.from(labs)
 		.leftJoin(memberships, memberOf(user))
 		.where(eq(labs.id, lab));
-	return row === undefined ? null : { ...row, studyId: null, isExample: false, isDeleted: false };
+	return row === undefined ? null : { ...row, studyId: null, madeBy: null, isExample: false, isDeleted: false };
 }
 
 async function findInStudy(object: StudyPart, { user, deleted }: Asking) {
@@ -49,12 +68,12 @@ async function findInStudy(object: StudyPart, { user, deleted }: Asking) {
 			.innerJoin(labs, eq(labs.id, studies.labId))
 			.leftJoin(memberships, memberOf(user))
 			.where(and(eq(studies.id, object.study), alive));
-		return row;
+		return row === undefined ? undefined : { ...row, madeBy: null };
 	}
 	const [kind, id] = partOf(object);
 	const part = PARTS[kind];
 	const [row] = await db()
-		.select({ ...placeColumns, partDeleted: part.deletedAt })
+		.select({ ...placeColumns, madeBy: part.createdBy, partDeleted: part.deletedAt })
 		.from(part)
 		.innerJoin(studies, eq(studies.id, part.studyId))
 		.innerJoin(labs, eq(labs.id, studies.labId))

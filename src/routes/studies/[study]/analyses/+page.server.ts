@@ -4,19 +4,18 @@ import * as analyses from '#lib/server/repositories/analyses.ts';
 import { analysisList } from './analysisList.server.ts';
 import type { Actions, PageServerLoad } from './$types';
 
-export const load: PageServerLoad = async ({ params, locals, url, parent }) => {
+export const load: PageServerLoad = async ({ params, locals, url }) => {
 	const access = await can(locals.user, 'read', { study: params.study });
-	const { study } = await parent();
-	const list = await analysisList(access, { withDeleted: study.may.lead, compare: url.searchParams.getAll('compare') });
+	const list = await analysisList(access, url.searchParams.getAll('compare'));
 	return { ...list, justDeleted: list.deleted.find(({ id }) => id === url.searchParams.get('deleted')) ?? null };
 };
 
 export const actions: Actions = {
 	restore: async ({ params, request, locals }) => {
-		const access = await can(locals.user, 'restore', { study: params.study });
 		const id = (await request.formData()).get('id');
-		const isBack = typeof id === 'string' && (await analyses.restore(access, id));
-		if (!isBack) return fail(404, { message: 'That analysis is not in this study any more.' });
+		if (typeof id !== 'string') return fail(400, { message: 'Say which analysis to bring back.' });
+		const access = await can(locals.user, 'restore', { analysis: id });
+		if (!(await analyses.restore(access, id))) return fail(404, { message: 'That analysis is not in this study any more.' });
 		redirect(303, `/studies/${params.study}/analyses/${id}`);
 	}
 };

@@ -1,22 +1,21 @@
 import { headlineWords } from '#lib/analysis/words/headlineWords.ts';
 import type { Access } from '#lib/server/access.ts';
+import { restorable } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { comparison } from './comparison.ts';
 import { findRenewals } from './renewals.server.ts';
 
-type Asked = {
-	readonly withDeleted: boolean;
-	/** ids of two analyses to set side by side */ readonly compare: readonly string[];
-};
-
-/** The analyses of a study, newest first, each with its finding and what it was asked; two of them side by side when asked. */
-export async function analysisList(access: Access, { withDeleted, compare }: Asked) {
+/**
+ * The analyses of a study, newest first, each with its finding and what it was asked; two of them side by side when asked.
+ * @param compare - ids of two analyses
+ */
+export async function analysisList(access: Access, compare: readonly string[]) {
 	const asked = await analyses.list(access);
 	const lines = await Promise.all(asked.map((listed) => analysisLine(access, listed)));
 	const renewedBy = new Map((await findRenewals(access, asked)).map(({ before, after }) => [before, after]));
-	const deleted = withDeleted ? await analyses.listDeleted(access) : [];
+	const deleted = restorable(access, await analyses.listDeleted(access));
 	const [first, second] = compare.map((id) => lines.find((line) => line.id === id)).filter((line) => line !== undefined);
 	return {
 		analyses: lines.map((line) => ({ ...line, renewedBy: renewedBy.get(line.id) ?? null })),

@@ -20,7 +20,7 @@ import { uploadRefusal } from './uploadRefusal.server.ts';
 export const load: PageServerLoad = async ({ params, locals, url, parent }) => {
 	const access = await can(locals.user, 'read', { study: params.study });
 	const { study } = await parent();
-	const page = await materialsPage(access, { withDeleted: study.may.lead });
+	const page = await materialsPage(access);
 	return {
 		...page,
 		replacing: study.may.change ? await replacing(access, replacedBy(url)) : null,

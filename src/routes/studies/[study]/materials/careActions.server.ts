@@ -22,6 +22,7 @@ import { staleAnalyses, type Stale } from './staleAnalyses.ts';
 
 const NOT_FOUND = 'That material is not in this study any more.';
 const repositoryOf = ({ kind }: MaterialName) => (kind === 'trees' ? treeSets : overlapRuns);
+const objectOf = ({ kind, id }: MaterialName) => (kind === 'trees' ? { treeSet: id } : { overlapRun: id });
 const pageOf = (study: string, query = '') => `/studies/${study}/materials${query}`;
 
 export async function renameMaterial({ params, request, locals }: RequestEvent) {
@@ -47,16 +48,20 @@ export async function copyMaterial({ params, request, locals }: RequestEvent) {
 }
 
 export async function removeMaterial({ params, request, locals }: RequestEvent) {
-	const access = await can(locals.user, 'delete', { study: params.study });
 	const form = await parseForm(request, materialForm);
-	if (!form.ok || !(await repositoryOf(form.value.material).remove(access, form.value.material.id))) error(404, NOT_FOUND);
-	redirect(303, pageOf(params.study, `?deleted=${form.value.material.id}`));
+	if (!form.ok) error(404, NOT_FOUND);
+	const { material } = form.value;
+	const access = await can(locals.user, 'delete', objectOf(material));
+	if (!(await repositoryOf(material).remove(access, material.id))) error(404, NOT_FOUND);
+	redirect(303, pageOf(params.study, `?deleted=${material.id}`));
 }
 
 export async function restoreMaterial({ params, request, locals }: RequestEvent) {
-	const access = await can(locals.user, 'restore', { study: params.study });
 	const form = await parseForm(request, materialForm);
-	if (!form.ok || !(await repositoryOf(form.value.material).restore(access, form.value.material.id))) error(404, NOT_FOUND);
+	if (!form.ok) error(404, NOT_FOUND);
+	const { material } = form.value;
+	const access = await can(locals.user, 'restore', objectOf(material));
+	if (!(await repositoryOf(material).restore(access, material.id))) error(404, NOT_FOUND);
 	redirect(303, pageOf(params.study));
 }
 

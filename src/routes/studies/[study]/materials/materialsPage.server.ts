@@ -3,6 +3,7 @@ import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { MaterialName } from '#lib/contracts/materialForms.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
+import { deletionOf, restorable, type Deletion } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
@@ -17,34 +18,40 @@ import { staleAnalyses } from './staleAnalyses.ts';
 import { printedFormRemark } from './printedForm.server.ts';
 
 /** What is kept of a study, what was deleted, and what rests on a material that was replaced. */
-export async function materialsPage(access: Access, { withDeleted }: { withDeleted: boolean }) {
+export async function materialsPage(access: Access) {
 	const [trees, runs] = [await treeSets.list(access), await overlapRuns.list(access)];
 	const gone = [...(await treeSets.listDeleted(access)), ...(await overlapRuns.listDeleted(access))];
 	const asked = await analyses.list(access);
 	const stale = staleAnalyses(asked, [...trees, ...runs, ...gone]);
+	const usedBy = (id: string) => asked.filter(({ treeSetId, overlapRunId }) => treeSetId === id || overlapRunId === id).length;
 	const uses: Uses = {
-		usedBy: (id) => asked.filter(({ treeSetId, overlapRunId }) => treeSetId === id || overlapRunId === id).length,
-		staleFor: (id) => stale.filter(({ through }) => through.includes(id)).length
+		usedBy,
+		staleFor: (id) => stale.filter(({ through }) => through.includes(id)).length,
+		deletion: (id, createdBy) => deletionOf(access, { createdBy, isUsed: usedBy(id) > 0 })
 	};
 	const printed = await printedFormRemark(access, runs);
 	const drawable = await openings.drawable(access, runs);
 	return {
 		trees: await Promise.all(trees.map((set) => keptTree(set, uses))),
 		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed, drawable }))),
-		deleted: withDeleted ? gone.map((material) => goneLine(material, [...trees, ...runs])) : []
+		deleted: restorable(access, gone).map((material) => goneLine(material, [...trees, ...runs]))
 	};
 }
 
 export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs'][number];
 
-type Uses = { readonly usedBy: (id: string) => number; readonly staleFor: (id: string) => number };
+type Uses = {
+	readonly usedBy: (id: string) => number;
+	readonly staleFor: (id: string) => number;
+	readonly deletion: (id: string, createdBy: string) => Deletion;
+};
 
-async function keptTree(set: TreeSet, { usedBy, staleFor }: Uses) {
+async function keptTree(set: TreeSet, { usedBy, staleFor, deletion }: Uses) {
 	const { id, label, kind, treeCount, createdAt, remarks } = set;
 	return {
 		...{ kind: 'trees' as const, id, label, at: createdAt, remarks: pageRemarks(remarks) },
 		facts: [treeKindWords(kind, treeCount), ...treeFactWords(set)],
-		...{ usedBy: usedBy(id), stale: staleFor(id) },
+		...{ usedBy: usedBy(id), stale: staleFor(id), deletion: deletion(id, set.createdBy) },
 		questions: treeSettleQuestions(remarks, {}),
 		drawing: await drawTreeSet(set),
 		wing: null,
@@ -59,7 +66,7 @@ type RunFrame = Uses & {
 	readonly drawable: ReadonlySet<string>;
 };
 
-async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order, printed, drawable }: RunFrame) {
+async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, deletion, order, printed, drawable }: RunFrame) {
 	const { id, label, measure, createdAt, species } = run;
 	const remarks = printed?.run === id ? [printed.remark, ...run.remarks] : run.remarks;
 	const whole = await overlapRuns.find(access, id);
@@ -70,7 +77,7 @@ async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, order
 			counted(species.length, 'species', 'species'),
 			missingWords(whole?.lower)
 		],
-		...{ usedBy: usedBy(id), stale: staleFor(id) },
+		...{ usedBy: usedBy(id), stale: staleFor(id), deletion: deletion(id, run.createdBy) },
 		questions: matrixSettleQuestions(run.remarks, {}).filter(({ isOpen }) => isOpen),
 		drawing: null,
 		wing: whole === null || !drawable.has(id) ? null : tinyWing(whole, order),

@@ -27,7 +27,7 @@ export async function runAgain({ params, locals }: RequestEvent) {
 }
 
 export async function removeAnalysis({ params, locals }: RequestEvent) {
-	const access = await can(locals.user, 'delete', { study: params.study });
+	const access = await can(locals.user, 'delete', { analysis: params.analysis });
 	if (!(await analyses.remove(access, params.analysis))) error(404, NOT_FOUND);
 	redirect(303, `/studies/${params.study}/analyses?deleted=${params.analysis}`);
 }

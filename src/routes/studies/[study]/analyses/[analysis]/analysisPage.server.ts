@@ -1,5 +1,7 @@
 import type { Access } from '#lib/server/access.ts';
+import { deletionOf } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import { isUsed } from '#lib/server/repositories/dependents.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { findingsView } from './findingsView.ts';
@@ -17,6 +19,7 @@ export async function analysisPage(access: Access, analysis: analyses.Analysis) 
 			tree: { label: tree.label, treeCount: tree.treeCount, ageUnit: tree.ageUnit, textHash: tree.textHash },
 			run: { label: run.label, measure: run.measure, textHash: run.textHash }
 		},
+		deletion: deletionOf(access, { createdBy: analysis.createdBy, isUsed: await isUsed({ analysis: id }) }),
 		failure: analysis.failure,
 		changes: status === 'finished' ? await analyses.outOfDate(access, analysis) : [],
 		running: status === 'waiting' || status === 'working' ? await runningView(access, analysis, tree) : null,

@@ -22,7 +22,7 @@ export async function renameRun({ params, request, locals }: RequestEvent) {
 }
 
 export async function removeRun({ params, locals }: RequestEvent) {
-	const access = await can(locals.user, 'delete', { study: params.study });
+	const access = await can(locals.user, 'delete', { overlapRun: params.run });
 	if (!(await overlapRuns.remove(access, params.run))) error(404, NOT_FOUND);
 	redirect(303, `/studies/${params.study}/materials?deleted=${params.run}`);
 }

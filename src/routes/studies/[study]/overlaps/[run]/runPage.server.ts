@@ -1,6 +1,7 @@
 import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { Access } from '#lib/server/access.ts';
+import { deletionOf } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as names from '#lib/server/repositories/names.ts';
 import { matrixOf, type OverlapRun } from '#lib/server/repositories/overlapRunRows.ts';
@@ -22,7 +23,7 @@ export async function runPage(access: Access, run: OverlapRun, chosen: string | 
 	const order = treeOrder(treeSet?.tips ?? [], pairs);
 	const isWhole = treeSet !== undefined && pairs.length === species.length && pairs.length === treeSet.tips.length;
 	const matrix = matrixOf(run);
-	const asked = await analyses.list(access);
+	const usedBy = (await analyses.list(access)).filter(({ overlapRunId }) => overlapRunId === id).length;
 	return {
 		run: {
 			id,
@@ -33,7 +34,8 @@ export async function runPage(access: Access, run: OverlapRun, chosen: string | 
 		},
 		figures: overlapFigures(species.length, lower),
 		reading: readingWords(reading),
-		usedBy: asked.filter(({ overlapRunId }) => overlapRunId === id).length,
+		usedBy,
+		deletion: deletionOf(access, { createdBy: run.createdBy, isUsed: usedBy > 0 }),
 		wing: wingOf(matrix, order),
 		order: order.length === 0 ? null : { tree: treeSet?.label ?? '', strangers: species.length - pairs.length },
 		drawing: isWhole ? await drawTreeSet(treeSet) : null,

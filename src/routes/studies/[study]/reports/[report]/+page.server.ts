@@ -15,7 +15,7 @@ export const load: PageServerLoad = async ({ params, locals }) => {
 
 export const actions: Actions = {
 	remove: async ({ params, locals }) => {
-		const access = await can(locals.user, 'delete', { study: params.study });
+		const access = await can(locals.user, 'delete', { report: params.report });
 		if (!(await reports.remove(access, params.report))) error(404, NOT_FOUND);
 		redirect(303, `/studies/${params.study}/reports?deleted=${params.report}`);
 	}

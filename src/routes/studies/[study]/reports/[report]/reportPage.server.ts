@@ -1,6 +1,7 @@
 import { contextSentences } from '#lib/analysis/words/contextSentences.ts';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { Access } from '#lib/server/access.ts';
+import { deletionOf } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import type { Report } from '#lib/server/repositories/reports.ts';
@@ -15,14 +16,16 @@ export async function reportPage(access: Access, report: Report) {
 	const { id, title, caption, notes, figure, author, createdAt, changedAt, captionEdited } = report;
 	const analysis = await analyses.find(access, report.analysisId);
 	const words = { id, title, caption, notes, figure, author, createdAt, changedAt, captionEdited, analysisId: report.analysisId };
+	const deletion = deletionOf(access, { createdBy: report.createdBy, isUsed: false });
 	// The analysis of a report may be deleted for a while; its words stay readable.
-	if (analysis?.result == null) return { report: words, found: null };
+	if (analysis?.result == null) return { report: words, deletion, found: null };
 	const { plan, hash, decisions, declaredAt, finishedAt, context } = analysis;
 	const tree = await treeSets.findKept(access, analysis.treeSetId);
 	const run = await overlapRuns.findListed(access, analysis.overlapRunId);
 	if (tree === null || run === null) throw new Error(`Expected the materials of analysis ${analysis.id}; one is not there.`);
 	return {
 		report: words,
+		deletion,
 		found: {
 			...resultWords(analysis.result),
 			...{ decisions, hash, declaredAt, finishedAt },
