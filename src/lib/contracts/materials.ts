@@ -27,7 +27,8 @@ export const treeSetRequestSchema = z.strictObject({
 	text: z.string(),
 	ageUnit: z.enum(AGE_UNITS).default('Ma'),
 	kind: z.enum(TREE_SET_KINDS).optional(),
-	burnIn: z.number().int().nonnegative().optional(),
+	/** trees to leave out at the start, or their share, above 0 and below 1 */
+	burnIn: z.union([z.number().int().nonnegative(), z.number().gt(0).lt(1)]).optional(),
 	thin: z.number().int().positive().optional(),
 	about: treeAboutSchema.optional(),
 	confirm: confirmSchema.optional()

@@ -76,10 +76,8 @@ describe('a tree text', () => {
 		expect(problem).toMatchObject({ status: 422, code: 'star-tree' });
 	});
 
-	it('of several trees needs a choice', async () => {
+	it('of several trees is tested over all of them, or by the one that is named', async () => {
 		const tree = `${TREE}\n${TREE}`;
-		expect(await refusedPlan({ tree })).toMatchObject({ status: 422, code: 'choose-a-tree' });
-		expect(await refusedPlan({ tree }, { tree: 'all' })).toMatchObject({ status: 422, code: 'choose-a-tree' });
 		expect(await refusedPlan({ tree }, { tree: 2 })).toMatchObject({ status: 422, code: 'no-such-tree' });
 		const materials = await bringMaterials(client, await makeStudy(client), { tree });
 		await runAnalysis(client, materials, { tree: 1 });
@@ -169,9 +167,7 @@ describe('a plan', () => {
 	});
 
 	it('that asks for what is not computed yet is a 422, never a silence', async () => {
-		for (const later of [{ clades: {} }, { signal: { variables: ['x'] } }, { robustness: {} }]) {
-			expect(await refusedPlan({}, later)).toMatchObject({ status: 422, code: 'not-offered-yet' });
-		}
+		expect(await refusedPlan({}, { robustness: {} })).toMatchObject({ status: 422, code: 'not-offered-yet' });
 		expect(await refusedPlan({}, { covariates: ['c'] })).toMatchObject({ status: 404 });
 	});
 

@@ -75,19 +75,10 @@ async function materialsOf(
 function completePlan(request: PlanRequest, { treeSet, niches }: Materials): Plan {
 	refuseLater(request);
 	const tree = request.tree ?? (treeSet.treeCount === 1 ? 0 : 'all');
-	if (tree === 'all' && treeSet.treeCount > 1) throw chooseATree(treeSet.treeCount);
-	const index = tree === 'all' ? 0 : tree;
-	if (index >= treeSet.treeCount) throw noSuchTree(index, treeSet.treeCount);
+	if (tree !== 'all' && tree >= treeSet.treeCount) throw noSuchTree(tree, treeSet.treeCount);
+	const index = treeSet.treeCount === 1 ? 0 : tree;
 	const signal = request.signal === null || !niches ? null : { ...request.signal, table: niches.id };
 	return { ...request, tree: index, signal, seed: request.seed ?? randomInt(SEED_LIMIT + 1) };
-}
-
-function chooseATree(count: number): Refusal {
-	return new Refusal(
-		422,
-		'choose-a-tree',
-		`This tree set holds ${count} trees. Choose one: give \`tree\` as a number from 0 to ${count - 1}; testing all of them at once is not offered yet.`
-	);
 }
 
 export function noSuchTree(index: number, count: number): Refusal {

@@ -71,6 +71,7 @@ export async function computeArgument(
 			treeText,
 			ageUnit,
 			spreadConfirmed,
+			chosen,
 			about: about ?? NOTHING_KNOWN,
 			measure,
 			overlap: { species, lower, remarks },
