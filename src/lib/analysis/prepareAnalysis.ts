@@ -10,6 +10,7 @@ import type { Remark } from '#lib/remarks/remark.ts';
 import { symmetricMatrix } from '#lib/statistics/pairValues.ts';
 import { chooseTree, type ChosenTree } from './chooseTree.ts';
 import { logitOverlap } from './logitOverlap.ts';
+import { outgroupRemarks, outgroupSide, type OutgroupSide } from './outgroupSide.ts';
 import { AnalysisRefusal } from './refusal.ts';
 import { sharedSpecies, type Dropped } from './sharedSpecies.ts';
 
@@ -30,6 +31,8 @@ export type PreparedAnalysis = {
 	/** what the statistics run on: the overlaps, transformed when the plan says so */
 	readonly response: Float64Array;
 	readonly dropped: readonly Dropped[];
+	/** a small side of the root that holds many of the pairs */
+	readonly outgroup: OutgroupSide | null;
 	readonly remarks: readonly Remark[];
 };
 
@@ -68,15 +71,18 @@ export function prepareAnalysis(inputs: AnalysisInputs, plan: Plan): PreparedAna
 	);
 	refuseMissing(matrix);
 	const overlap = matrix.values;
+	const ages = nodeAges(tree);
+	const outgroup = outgroupSide({ tree, ages, species, fewest: FEWEST_SPECIES });
 	return {
 		chosen,
 		tree,
-		ages: nodeAges(tree),
+		ages,
 		species,
 		overlap,
 		response: plan.transform === 'logit' ? logitOverlap(overlap, species.length) : overlap,
 		dropped,
-		remarks: [...chosen.remarks, ...inputs.overlap.remarks, ...remarks]
+		outgroup,
+		remarks: [...chosen.remarks, ...inputs.overlap.remarks, ...remarks, ...outgroupRemarks(outgroup)]
 	};
 }
 

@@ -9,6 +9,7 @@ import { isExact } from '#lib/statistics/permutationTest.ts';
 import { declaredStatistics } from './alsoTested.ts';
 import { smallestFreeP } from './attainable.ts';
 import { cladeGroups } from './cladeGroups.ts';
+import { plannedCovariates } from './covariates/plannedCovariates.ts';
 import { nicheTraits } from './nicheTraits.ts';
 import { prepareAnalysis } from './prepareAnalysis.ts';
 import { refuseAgeZero } from './refuseAgeZero.ts';
@@ -16,12 +17,13 @@ import { previewOverTrees } from './trees/previewOverTrees.ts';
 
 /**
  * What an analysis would use and could at best say, without running it.
- * @throws {InputError} as `prepareAnalysis`, `preparePermutation`, `cladeGroups` and `nicheTraits`: exactly what would stop the analysis itself
+ * @throws {InputError} as `prepareAnalysis`, `preparePermutation`, `cladeGroups`, `nicheTraits` and `plannedCovariates`: exactly what would stop the analysis itself
  */
 export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPreview {
 	const prepared = prepareAnalysis(inputs, plan);
-	const { tree, ages, species, response, dropped, remarks } = prepared;
+	const { tree, ages, species, response, dropped, outgroup, remarks } = prepared;
 	nicheTraits(prepared, inputs, plan);
+	plannedCovariates(prepared, inputs, plan);
 	const design = preparePermutation({
 		tree: { parent: tree.parent, ages },
 		overlap: response,
@@ -41,6 +43,7 @@ export function previewAnalysis(inputs: AnalysisInputs, plan: Plan): AnalysisPre
 		rootPairShare: design.rootPairShare,
 		smallestP: Math.min(1, sides * smallestFreeP(tree, ages, design, { exact, shuffles: plan.permutations })),
 		exact,
+		outgroup: outgroup && { species: outgroup.species, rest: outgroup.rest },
 		remarks,
 		...previewOverTrees(prepared, plan)
 	};

@@ -29,6 +29,8 @@ export type AnalysisInputs = {
 		readonly remarks: readonly Remark[];
 	};
 	readonly decisions: readonly { readonly from: string; readonly to: string | null; readonly why?: string }[];
+	/** what the plan allows for, in its order */
+	readonly covariates?: readonly CovariateInput[];
 	/** niche positions and what goes with them, when the plan asks for their signal */
 	readonly niches?: { readonly label: string } & Pick<NicheTable, 'species' | 'variables'>;
 };
@@ -91,6 +93,8 @@ export type AnalysisPreview = {
 	readonly exact: boolean;
 	/** trees that are averaged over, and the share that has the commonest root split; only for a plan on all trees of a set */
 	readonly trees?: { readonly count: number; readonly splitShare: number };
+	/** a small side of the root that holds many of the pairs, and the species that would remain without it */
+	readonly outgroup: { readonly species: readonly string[]; readonly rest: readonly string[] } | null;
 	readonly remarks: readonly Remark[];
 };
 
