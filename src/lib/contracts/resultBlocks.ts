@@ -56,20 +56,32 @@ export const partialBlockSchema = z.object({
 	p: probability,
 	...tails,
 	/** whole overlaps permuted instead, as a check */
-	raw: z.object({ p: probability, ...tails })
+	raw: z.object({ p: probability, ...tails }),
+	/** every relabelling of the species */
+	exact: z.boolean(),
+	/** n! when exact, else shuffles */
+	count: z.number().int()
 });
 
 export const matrixRegressionBlockSchema = z.object({
+	/** overlap where age and covariates are 0: far outside the data */
+	intercept: z.number(),
+	/** how age stands in the regression */
+	ageScale: z.enum(['plain', 'log2']),
 	/** `age` first, then the covariates by their labels; p by double semi-partialing, two-sided */
 	coefficients: z.array(
 		z.object({
 			name: z.string(),
 			estimate: z.number(),
-			t: z.number(),
+			/** null where nothing is left of the overlaps to measure by */
+			t: z.number().nullable(),
 			p: probability,
+			...tails,
 			varianceInflation: z.number(),
 			/** correlation with age; null for age itself */
-			rWithAge: z.number().nullable()
+			rWithAge: z.number().nullable(),
+			/** ln(1 + value) in place of the value */
+			scale: z.enum(['plain', 'log']).nullable()
 		})
 	),
 	rSquared: probability,

@@ -1,6 +1,7 @@
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { BlockContext } from './blockContext.ts';
 import { cladesBlock } from './cladesBlock.ts';
+import { covariatesBlock } from './covariatesBlock.ts';
 import { signalBlock } from './signalBlock.ts';
 import { sistersBlock } from './sistersBlock.ts';
 
@@ -10,7 +11,7 @@ export type ResultBlocks = Partial<AnalysisResult>;
 type Block = (context: BlockContext) => ResultBlocks;
 
 /** One entry a block, in the order of the findings page. A block that was not asked for returns an empty object. */
-const BLOCKS: readonly Block[] = [cladesBlock, sistersBlock, signalBlock];
+const BLOCKS: readonly Block[] = [covariatesBlock, cladesBlock, sistersBlock, signalBlock];
 
 export function resultBlocks(context: BlockContext): ResultBlocks {
 	return Object.assign({}, ...BLOCKS.map((block) => block(context)));

@@ -10,6 +10,7 @@ import { analysisHash, computeArgument, decisionsFor, type Materials } from '#li
 import * as names from '#lib/server/repositories/names.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
+import { covariatesOf } from './covariatesOf.ts';
 import { nicheTableOf } from './nicheTableOf.ts';
 import { notInStudy } from './notInStudy.ts';
 import { Refusal } from './refusal.ts';
@@ -61,14 +62,14 @@ async function checkedPlan(access: Access, request: PlanRequest): Promise<Starte
 
 async function materialsOf(
 	access: Access,
-	{ treeSet: treeSetId, overlapRun, covariates, signal }: PlanRequest
+	{ treeSet: treeSetId, overlapRun, covariates: allowedFor, signal }: PlanRequest
 ): Promise<Materials> {
 	const treeSet = await treeSets.find(access, treeSetId);
 	if (treeSet === null) throw notInStudy('tree set', treeSetId);
 	const run = await overlapRuns.find(access, overlapRun);
 	if (run === null) throw notInStudy('overlap run', overlapRun);
-	if (covariates[0] !== undefined) throw notInStudy('covariate', covariates[0]);
-	return { treeSet, run, niches: signal === null ? null : await nicheTableOf(access, signal.table) };
+	const allowed = await covariatesOf(access, allowedFor);
+	return { treeSet, run, covariates: allowed, niches: signal === null ? null : await nicheTableOf(access, signal.table) };
 }
 
 /** The plan as it is stored: every default written out, the seed drawn. */

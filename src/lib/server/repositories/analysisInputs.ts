@@ -1,5 +1,5 @@
 import { eq, and } from 'drizzle-orm';
-import type { AnalysisInputs } from '#lib/contracts/compute.ts';
+import type { AnalysisInputs, CovariateInput } from '#lib/contracts/compute.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import type { Access } from '#lib/server/access.ts';
@@ -7,6 +7,8 @@ import { db } from '#lib/server/db/client.ts';
 import { analyses } from '#lib/server/db/schema.ts';
 import { createHash } from 'node:crypto';
 import { canonicalHash } from './analysisHash.ts';
+import type { Covariate } from './covariateRows.ts';
+import * as covariates from './covariates.ts';
 import type { NameDecision } from './names.ts';
 import type { UsedDecision } from './analysisRows.ts';
 import { storedVariable, type KeptNicheTable } from './nicheTableRows.ts';
@@ -23,20 +25,29 @@ export type Materials = {
 	readonly run: OverlapRun;
 	/** when the plan asks for signal in niche positions */
 	readonly niches?: KeptNicheTable | null;
+	/** what the plan allows for, in its order */
+	readonly covariates?: readonly Covariate[];
 };
 
 /** What a compute thread is given. The tree of the plan is counted in the text, not in the chosen trees of the set. */
 export type ComputeArgument = { readonly inputs: AnalysisInputs; readonly plan: Plan };
+
+/** Materials whose names decisions are about. */
+type NamedMaterials = {
+	readonly run: Pick<OverlapRun, 'species'>;
+	readonly niches?: Pick<KeptNicheTable, 'species'> | null;
+	readonly covariates?: readonly Pick<Covariate, 'species'>[];
+};
 
 /**
  * The decisions that can touch what is compared, in a fixed order: those about names it holds, and every name left out, since that
  * may be a tip of the tree.
  */
 export function decisionsFor(
-	{ run, niches }: { run: Pick<OverlapRun, 'species'>; niches?: Pick<KeptNicheTable, 'species'> | null },
+	{ run, niches, covariates = [] }: NamedMaterials,
 	decisions: readonly NameDecision[]
 ): UsedDecision[] {
-	const held = new Set([...run.species, ...(niches?.species ?? [])]);
+	const held = new Set([run.species, niches?.species ?? [], ...covariates.map(({ species }) => species)].flat());
 	return decisions
 		.filter(({ from, to }) => held.has(from) || to === null)
 		.map(({ from, to, why }) => ({ from, to, ...(why === '' ? {} : { why }) }))
@@ -44,22 +55,40 @@ export function decisionsFor(
 }
 
 /** What makes an analysis the one it is: the plan and every input it runs on. */
-export function analysisHash(plan: Plan, { treeSet, run, niches }: Materials, decisions: readonly UsedDecision[]): string {
+export function analysisHash(
+	plan: Plan,
+	{ treeSet, run, niches, covariates = [] }: Materials,
+	decisions: readonly UsedDecision[]
+): string {
 	const { textHash, ageUnit, spreadConfirmed, chosen, about } = treeSet;
 	const { species, measure, lower } = run;
-	const values = createHash('sha256').update(bytesOf(lower)).digest('hex');
+	const values = valuesHash(lower);
 	return canonicalHash({
 		plan,
 		trees: { textHash, ageUnit, spreadConfirmed, chosen, ...(about === null ? {} : { about }) },
 		overlap: { species, measure, values },
 		...(niches ? { niches: { species: niches.species, variables: niches.variables.map(storedVariable) } } : {}),
+		...(covariates.length > 0 ? { covariates: covariates.map(covariateIdentity) } : {}),
 		decisions
 	});
 }
 
+function valuesHash(lower: Float64Array): string {
+	return createHash('sha256').update(bytesOf(lower)).digest('hex');
+}
+
+/** The scale is in the values. */
+function covariateIdentity({ species, lower }: Covariate) {
+	return { species, values: valuesHash(lower) };
+}
+
+function covariateInput({ label, species, lower, remarks, reading: { kind, scale } }: Covariate): CovariateInput {
+	return { label, species, lower, remarks, kind, scale };
+}
+
 export async function computeArgument(
 	plan: Plan,
-	{ treeSet, run, niches }: Materials,
+	{ treeSet, run, niches, covariates = [] }: Materials,
 	decisions: readonly UsedDecision[]
 ): Promise<ComputeArgument> {
 	const { species, lower, remarks, measure } = run;
@@ -76,6 +105,7 @@ export async function computeArgument(
 			measure,
 			overlap: { species, lower, remarks },
 			decisions,
+			...(covariates.length > 0 ? { covariates: covariates.map(covariateInput) } : {}),
 			...(niches ? { niches: { label: niches.label, species: niches.species, variables: niches.variables } } : {})
 		},
 		plan: { ...plan, tree }
@@ -102,7 +132,9 @@ export async function inputsOf(access: Access, id: string): Promise<ComputeArgum
 	const treeSet = await treeSets.findKept(access, row.treeSetId);
 	const run = await overlapRuns.findKept(access, row.overlapRunId);
 	if (treeSet === null || run === null) throw new Error(`Expected the materials of analysis ${id}; one is not there.`);
-	return computeArgument(row.plan, { treeSet, run, niches: await nichesOf(access, row.plan) }, row.decisions);
+	const niches = await nichesOf(access, row.plan);
+	const allowed = await covariates.keptOf(access, row.plan.covariates);
+	return computeArgument(row.plan, { treeSet, run, niches, covariates: allowed }, row.decisions);
 }
 
 /**

@@ -52,6 +52,16 @@ export async function findKept(access: Access, ids: readonly string[]): Promise<
 	return ids.flatMap((id) => found.get(id) ?? []);
 }
 
+/**
+ * The covariates of a stored plan, deleted ones too.
+ * @throws {Error} when one is not there: a defect of ours
+ */
+export async function keptOf(access: Access, ids: readonly string[]): Promise<Covariate[]> {
+	const found = await findKept(access, ids);
+	if (found.length < ids.length) throw new Error(`Expected ${ids.length} covariates of a plan; ${found.length} are there.`);
+	return found;
+}
+
 /** @throws {InputError} what the reader of covariates refuses */
 export async function create(access: Access, request: CovariateRequest): Promise<Covariate> {
 	const reading = await readRequest(request);

@@ -1,10 +1,11 @@
 import { and, eq, isNull } from 'drizzle-orm';
 import type { Access } from '#lib/server/access.ts';
 import { db } from '#lib/server/db/client.ts';
-import { nicheTables, overlapRuns, treeSets } from '#lib/server/db/schema.ts';
+import { covariates, nicheTables, overlapRuns, treeSets } from '#lib/server/db/schema.ts';
 import { analysisHash, decisionsFor, nichesOf } from './analysisInputs.ts';
 import type { ListedAnalysis } from './analysisRows.ts';
 import { canonicalJson } from './analysisHash.ts';
+import * as kept from './covariates.ts';
 import * as names from './names.ts';
 import * as runs from './overlapRuns.ts';
 import * as trees from './treeSets.ts';
@@ -17,6 +18,8 @@ export type Change = {
 		| 'tree-set-deleted'
 		| 'overlap-run-replaced'
 		| 'overlap-run-deleted'
+		| 'covariate-replaced'
+		| 'covariate-deleted'
 		| 'niche-table-replaced'
 		| 'niche-table-deleted'
 		| 'material-read-again'
@@ -32,17 +35,19 @@ export async function outOfDate(access: Access, analysis: Used): Promise<Change[
 	const run = await runs.findKept(access, analysis.overlapRunId);
 	if (treeSet === null || run === null) throw new Error('Expected the materials of the analysis; one is not there.');
 	const niches = await nichesOf(access, analysis.plan);
+	const allowed = await kept.keptOf(access, analysis.plan.covariates);
 	const changes: Change[] = [];
 	if (treeSet.deletedAt !== null) changes.push(await lostTreeSet(access, treeSet));
 	if (run.deletedAt !== null) changes.push(await lostRun(access, run));
+	for (const covariate of allowed) if (covariate.deletedAt !== null) changes.push(await lostCovariate(access, covariate));
 	if (niches?.deletedAt) changes.push(await lostNicheTable(access, niches));
-	if (analysisHash(analysis.plan, { treeSet, run, niches }, analysis.decisions) !== analysis.hash) {
+	if (analysisHash(analysis.plan, { treeSet, run, niches, covariates: allowed }, analysis.decisions) !== analysis.hash) {
 		changes.push({
 			code: 'material-read-again',
 			message: 'A remark about the tree or the matrix was settled in another way since.'
 		});
 	}
-	const decisions = decisionsFor({ run, niches }, await names.current(access));
+	const decisions = decisionsFor({ run, niches, covariates: allowed }, await names.current(access));
 	if (canonicalJson(decisions) !== canonicalJson(analysis.decisions)) {
 		changes.push({ code: 'names-changed', message: 'Decisions about names have changed since.' });
 	}
@@ -67,6 +72,16 @@ async function lostRun(access: Access, { id, label }: { id: string; label: strin
 	return newer[0] === undefined
 		? { code: 'overlap-run-deleted', message: `The overlap run “${label}” was deleted since.` }
 		: { code: 'overlap-run-replaced', message: `The overlap run “${label}” was replaced by “${newer[0].label}” since.` };
+}
+
+async function lostCovariate(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
+	const newer = await db()
+		.select({ label: covariates.label })
+		.from(covariates)
+		.where(and(within(access, covariates.studyId), eq(covariates.replaces, id), isNull(covariates.deletedAt)));
+	return newer[0] === undefined
+		? { code: 'covariate-deleted', message: `The covariate “${label}” was deleted since.` }
+		: { code: 'covariate-replaced', message: `The covariate “${label}” was replaced by “${newer[0].label}” since.` };
 }
 
 async function lostNicheTable(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
