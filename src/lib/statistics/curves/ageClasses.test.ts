@@ -1,7 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import { treeShape } from '../agedTree.ts';
-import { interleave } from '../blockSums.ts';
 import { drawnOverlap, drawnTree, exampleTree } from '../exampleTrees.ts';
 import { pairBlocks } from '../pairBlocks.ts';
 import { symmetricMatrix } from '../pairValues.ts';
@@ -11,7 +10,7 @@ import { ageClasses, bandShuffles, classesByAge } from './ageClasses.ts';
 function asked(tree: ReturnType<typeof drawnTree>, overlap: Float64Array, permutations = 499) {
 	const shape = treeShape(tree);
 	const tipCount = shape.tips.length;
-	const input = { layout: pairBlocks(shape), cells: interleave(overlap, new Float64Array(overlap.length)), tipCount };
+	const input = { layout: pairBlocks(shape), overlap, tipCount };
 	const ages = Float64Array.from(shape.internal, (node) => tree.ages[node] ?? 0);
 	const groups = [{ from: 0, to: tipCount }];
 	return ageClasses(input, ages, { tipCount, groups, domain: STREAM_DOMAIN.free, seed: 7, permutations });

@@ -1,8 +1,8 @@
 import { InputError } from '#lib/remarks/inputError.ts';
-import { emptyBlockSums, type BlockInput, sumBlocksInPlace } from '../blockSums.ts';
+import { type NodeSumsInput, nodeSumsOfBatch } from '../nodeSums.ts';
 import { quantiles } from '../quantiles.ts';
 import { identityArrangement } from '../arrangements.ts';
-import { shuffleBatches, type ShuffleQuestion } from '../shuffleBatches.ts';
+import { type ShuffleBatch, shuffleBatches, type ShuffleQuestion } from '../shuffleBatches.ts';
 
 /** Nodes of neighbouring ages, and the pairs that meet there. */
 export type AgeClass = {
@@ -56,33 +56,31 @@ export function classesByAge(ages: Float64Array): number[][] {
  * @param question - the free question of the test; its first shuffles are read, or all arrangements when they are few
  * @throws {InputError} `non-finite` when an age is not a number
  */
-export function ageClasses(input: BlockInput, ages: Float64Array, question: ShuffleQuestion): AgeClass[] {
+export function ageClasses(input: NodeSumsInput, ages: Float64Array, question: ShuffleQuestion): AgeClass[] {
 	if (!ages.every(Number.isFinite)) throw new InputError('non-finite', 'Expected every node age to be a finite number.');
 	const { pairs } = input.layout;
 	const classes = classesByAge(ages);
 	const pairsIn = classes.map((slots) => slots.reduce((sum, slot) => sum + (pairs[slot] ?? 0), 0));
-	const sums = emptyBlockSums(pairs.length);
-	const meansOf = (arrangement: Int32Array): number[] => {
-		sumBlocksInPlace(sums, input, arrangement);
-		return classes.map((slots, i) => slots.reduce((sum, slot) => sum + (sums.plain[slot] ?? 0), 0) / (pairsIn[i] ?? 1));
+	const meansOf = (batch: Pick<ShuffleBatch, 'count' | 'arrangements'>): number[][] => {
+		const { plain } = nodeSumsOfBatch(input, batch);
+		return classes.map((slots, place) =>
+			Array.from({ length: batch.count }, (_, i) => {
+				const from = i * pairs.length;
+				return slots.reduce((sum, slot) => sum + (plain[from + slot] ?? 0), 0) / (pairsIn[place] ?? 1);
+			})
+		);
 	};
 
-	const observed = meansOf(identityArrangement(input.tipCount));
-	const shuffled: number[][] = classes.map(() => []);
+	const observed = meansOf({ count: 1, arrangements: identityArrangement(input.tipCount) });
 	const permutations = Math.min(question.permutations, bandShuffles(input.tipCount));
-	for (const { count, arrangements } of shuffleBatches({ ...question, permutations })) {
-		for (let i = 0; i < count; i++) {
-			const means = meansOf(arrangements.subarray(i * input.tipCount, (i + 1) * input.tipCount));
-			for (const [place, values] of shuffled.entries()) values.push(means[place] ?? 0);
-		}
-	}
+	const batches = Array.from(shuffleBatches({ ...question, permutations }), meansOf);
 	return classes.map((slots, i) => ({
 		from: ages[slots[0] ?? 0] ?? 0,
 		to: ages[slots.at(-1) ?? 0] ?? 0,
 		nodes: slots.length,
 		pairs: pairsIn[i] ?? 0,
-		mean: observed[i] ?? 0,
-		shuffled: bandOf(shuffled[i] ?? [])
+		mean: observed[i]?.[0] ?? 0,
+		shuffled: bandOf(batches.flatMap((means) => means[i] ?? []))
 	}));
 }
 
