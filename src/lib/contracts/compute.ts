@@ -31,8 +31,6 @@ export type AnalysisInputs = {
 	readonly decisions: readonly { readonly from: string; readonly to: string | null; readonly why?: string }[];
 	/** what the plan allows for, in its order */
 	readonly covariates?: readonly CovariateInput[];
-	/** what the plan allows for, in its order */
-	readonly covariates?: readonly CovariateInput[];
 	/** niche positions and what goes with them, when the plan asks for their signal */
 	readonly niches?: { readonly label: string } & Pick<NicheTable, 'species' | 'variables'>;
 };
