@@ -56,13 +56,13 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 	});
 
 	const moments = mantelMoments(pairAges, response);
-	const averages = nodeAverages({ parent: tree.parent, ages }, response);
 	const compared = describeCompared(prepared, inputs, plan, lower.overlaps);
 	const mantelStatistics = mantel(lower.ages, lower.overlaps);
 	const judged = overTrees?.outcome ?? outcome;
 	const described = describePermutation({ prepared, design, outcome: judged, plan, moments, pairAges: lower.ages });
 	const permutation = overTrees?.permutationOf(described) ?? described;
 	const trees = overTrees?.blockOf(permutation);
+	const blocks = resultBlocks({ inputs, plan, prepared, design, outcome, regression: line, pairAges, lower });
 	return {
 		compared,
 		species: species.length,
@@ -72,16 +72,14 @@ export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): An
 		regression: line,
 		permutation: { ...permutation, ...alsoTested(overTrees?.outcome ?? design, judged, plan) },
 		mantel: mantelStatistics,
-		nodeAverages: {
-			nodes: nodeRows(prepared, averages),
-			nested: { ...averages.nested, ...nodeTails(outcome, 'nodes-nested') },
-			plain: { ...averages.plain, ...nodeTails(outcome, 'nodes-plain') }
-		},
+		nodeAverages: describeNodes(prepared, outcome),
 		...(trees === undefined ? {} : { trees }),
-		...resultBlocks({ inputs, plan, prepared, design, outcome, regression: line, pairAges, lower }),
+		...blocks,
 		finding: findingOf({
 			compared,
 			trees,
+			about: inputs.about,
+			blocks,
 			permutation,
 			regression: line,
 			moments,
@@ -121,6 +119,15 @@ function pick({ residualStandardDeviation, ...line }: LinearRegression): Analysi
 	if (residualStandardDeviation === null) throw new Error('Four species or more give six pairs: the residuals have a spread.');
 	const { slope, intercept, r, rSquared } = line;
 	return { slope, intercept, r, rSquared, residualStandardDeviation };
+}
+
+function describeNodes(prepared: PreparedAnalysis, outcome: PermutationOutcome): AnalysisResult['nodeAverages'] {
+	const averages = nodeAverages({ parent: prepared.tree.parent, ages: prepared.ages }, prepared.response);
+	return {
+		nodes: nodeRows(prepared, averages),
+		nested: { ...averages.nested, ...nodeTails(outcome, 'nodes-nested') },
+		plain: { ...averages.plain, ...nodeTails(outcome, 'nodes-plain') }
+	};
 }
 
 function nodeTails({ free }: PermutationOutcome, statistic: 'nodes-nested' | 'nodes-plain') {

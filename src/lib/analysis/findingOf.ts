@@ -1,4 +1,5 @@
 import type { AnalysisResult, Finding } from '#lib/contracts/analysisResult.ts';
+import type { AnalysisInputs } from '#lib/contracts/compute.ts';
 import type { Moments } from '#lib/statistics/mantelMoments.ts';
 import { pearsonThreeTail } from '#lib/statistics/momentTails.ts';
 import { findFinding } from './words/finding.ts';
@@ -8,6 +9,8 @@ const FEWEST_FOR_MOMENTS = 10;
 
 type Computed = Pick<AnalysisResult, 'compared' | 'permutation' | 'regression' | 'species'> & {
 	readonly trees?: AnalysisResult['trees'] | undefined;
+	readonly about?: AnalysisInputs['about'];
+	readonly blocks: Pick<AnalysisResult, 'signal' | 'power'>;
 	readonly moments: Moments;
 	readonly z: number;
 	readonly ages: Float64Array;
@@ -15,7 +18,19 @@ type Computed = Pick<AnalysisResult, 'compared' | 'permutation' | 'regression' |
 };
 
 /** The finding that computed numbers license. */
-export function findingOf({ compared, permutation, regression, species, moments, z, ages, parent, trees }: Computed): Finding {
+export function findingOf({
+	compared,
+	permutation,
+	regression,
+	species,
+	moments,
+	z,
+	ages,
+	parent,
+	trees,
+	about,
+	blocks
+}: Computed): Finding {
 	return findFinding({
 		measure: compared.measure,
 		ageUnit: compared.ageUnit,
@@ -34,7 +49,10 @@ export function findingOf({ compared, permutation, regression, species, moments,
 		transformed: compared.transform !== 'none',
 		polytomies: compared.polytomies,
 		treesInSet: compared.tree.treesInSet,
-		trees
+		trees,
+		...(about === undefined ? {} : { about }),
+		signal: blocks.signal,
+		power: blocks.power
 	});
 }
 

@@ -43,4 +43,13 @@ describe('writeCaption', () => {
 		expect(caption).toContain('Tips were levelled by extending terminal branches.');
 		expect(caption).toContain('Overlap on the logit scale.');
 	});
+
+	it('tells what the marks of clades are, where some hold', () => {
+		const result = microResult({ clades: { minTips: 3 } });
+		expect(writeCaption(result)).not.toContain('Brackets');
+		const clades = result.clades?.map((row) => ({ ...row, holds: true }));
+		expect(writeCaption({ ...result, clades })).toContain(
+			'Brackets on the tree and outlines on the wing: clades more alike inside'
+		);
+	});
 });

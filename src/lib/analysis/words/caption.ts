@@ -77,6 +77,11 @@ function notes(result: AnalysisResult): string {
 	if (result.dropped.length > 0) lines.push(`Left out: ${result.dropped.map((entry) => entry.name).join(', ')}.`);
 	if (result.compared.polytomies > 0) lines.push(`Unresolved nodes: ${result.compared.polytomies}.`);
 	if (result.compared.levelled) lines.push('Tips were levelled by extending terminal branches.');
+	if (result.clades?.some(({ holds, node }) => holds && node !== null)) {
+		lines.push(
+			'Brackets on the tree and outlines on the wing: clades more alike inside than with the other species, and than with the rest of the clade that contains them, each adjusted for all clades asked about.'
+		);
+	}
 	if (result.compared.transform === 'logit') lines.push('Overlap on the logit scale.');
 	return lines.join(' ');
 }

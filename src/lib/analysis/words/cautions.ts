@@ -1,6 +1,8 @@
 import type { Finding, FindingKind } from '#lib/contracts/analysisResult.ts';
+import { authorCautions } from './authorCautions.ts';
 import type { FindingFacts } from './findingFacts.ts';
 import { formatAge, formatCount, formatFixed, formatShare } from './numbers.ts';
+import { companionCautions } from './signalSentence.ts';
 import { treeCautions } from './treeCautions.ts';
 import { unitWords } from './units.ts';
 
@@ -134,6 +136,13 @@ const rules: readonly Rule[] = [
 		kind === 'rises-with-age' && alternative === 'less'
 			? { code: 'other-direction', message: 'The plan asked whether overlap falls. The rise is read from the two-sided p only.' }
 			: null,
+	({ permutation: { p, pAdjusted, also }, alpha }) =>
+		pAdjusted !== undefined && p <= alpha && pAdjusted > alpha
+			? {
+					code: 'adjusted-above-level',
+					message: `Adjusted for the ${formatCount((also?.length ?? 0) + 1)} statistics that were declared, p is ${formatFixed(pAdjusted, 3)}, above ${alpha}: the finding hangs on which of them is read.`
+				}
+			: null,
 	({ permutation, ageUnit }) =>
 		permutation.statistic === 'slope'
 			? null
@@ -146,5 +155,6 @@ const rules: readonly Rule[] = [
 /** A caution for every pitfall that is present in these data. */
 export function findCautions(kind: FindingKind, facts: FindingFacts): Caution[] {
 	const ofTest = rules.map((rule) => rule(facts, kind)).filter((caution): caution is Caution => caution !== null);
-	return [...ofTest, ...treeCautions(facts)];
+	const companions = facts.signal === undefined ? [] : companionCautions(facts.signal, facts.alpha);
+	return [...ofTest, ...companions, ...treeCautions(facts), ...authorCautions(facts)];
 }

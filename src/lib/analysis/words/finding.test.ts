@@ -1,4 +1,5 @@
 import { describe, expect, it } from 'vitest';
+import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import { findFinding, findingKind } from './finding.ts';
 import type { FindingFacts } from './findingFacts.ts';
 
@@ -99,6 +100,27 @@ describe('findingKind', () => {
 		expect(findingKind(facts({ slope: 0.02 }, { ...rising, pGreater: 0.01, pTwoSided: 0.02 }))).toBe('rises-with-age');
 	});
 
+	it('says stronger than a random walk only beside signal, with a K that random walks hardly reach', () => {
+		const k = { value: 1.7, p: 0.001, exact: false, count: 9999, pAdjusted: 0.001, pAboveRandomWalk: 0.01 };
+		const variable = {
+			variable: 'warmth',
+			role: 'position',
+			species: 26,
+			leftOut: [],
+			k,
+			lambda: null,
+			models: [],
+			measurementError: false,
+			notes: []
+		} as const;
+		const signal = { table: 'Positions', variables: [{ ...variable, leftOut: [], models: [], notes: [] }] };
+		expect(findingKind(facts({ signal }))).toBe('stronger-than-random-walk');
+		expect(findFinding(facts({ signal })).sentence).toContain(
+			'in warmth relatives are nearer than a random walk along the tree would leave them'
+		);
+		expect(findingKind(facts({ signal }, { p: 0.3, pLess: 0.3, withinDeepestSplit: null }))).toBe('none-detected');
+	});
+
 	it('says too few when no arrangement could have reached alpha', () => {
 		expect(findingKind(facts({ species: 4 }, { smallestP: 1 / 12 }))).toBe('too-few');
 	});
@@ -121,6 +143,23 @@ describe('findFinding', () => {
 			'Among 26 species, Schoener’s D is lower by 0.0163 for each million years since common ancestry. 15 of 9,999 shuffles of the species fell as steeply (p = 0.0016). ' +
 				'This is phylogenetic signal in niche overlap; it is not yet evidence that niches were held back.'
 		);
+	});
+
+	it('says what the design could have detected when nothing was', () => {
+		const power = {
+			simulations: 200,
+			shuffles: 199,
+			alpha: 0.05,
+			truths: [
+				{ theta: 1, axes: 1 },
+				{ theta: 1, axes: 2 }
+			],
+			rows: [{ statistic: 'slope' as const, power: [0.71, 0.94] }],
+			standardError: 0.04,
+			recommended: 'nodes-plain' as const
+		};
+		const flat = facts({ power }, { p: 0.34, pLess: 0.34, pTwoSided: 0.68, withinDeepestSplit: null });
+		expect(findFinding(flat).sentence).toContain('this test would have found it in 71 % to 94 % of cases');
 	});
 
 	it('states the floor when no shuffle was as extreme', () => {
@@ -160,7 +199,11 @@ describe('cautions', () => {
 		['very-strong', facts({ r: -0.9 })],
 		['moments-disagree', facts({ momentP: 0.08 })],
 		['polytomies', facts({ polytomies: 2 })],
-		['judged-by-other', facts({}, { statistic: 'nodes-plain' })]
+		['judged-by-other', facts({}, { statistic: 'nodes-plain' })],
+		['adjusted-above-level', facts({}, { pAdjusted: 0.07, also: [] })],
+		['sampling-unknown', facts({ about: NOTHING_KNOWN })],
+		['sampling', facts({ about: { ...NOTHING_KNOWN, speciesInClade: 60 } })],
+		['placed-tips', facts({ about: { ...NOTHING_KNOWN, placement: 'some-placed', placedTips: ['A'] } })]
 	])('gives %s when its pitfall is present, and not otherwise', (code, present) => {
 		expect(codes(present)).toContain(code);
 		expect(codes(falling)).not.toContain(code);

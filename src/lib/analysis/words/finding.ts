@@ -2,11 +2,12 @@ import type { Finding, FindingKind } from '#lib/contracts/analysisResult.ts';
 import { findCautions } from './cautions.ts';
 import type { FindingFacts } from './findingFacts.ts';
 import { findingLimits } from './limits.ts';
+import { beyondRandomWalk } from './signalSentence.ts';
 import { findingSentence } from './sentence.ts';
 
 const TITLES: Readonly<Record<FindingKind, string>> = {
 	signal: 'Overlap falls with age more than chance allows',
-	'stronger-than-random-walk': 'Relatives overlap more than a random walk would leave',
+	'stronger-than-random-walk': 'Overlap falls with age, and relatives are nearer than a random walk would leave them',
 	'one-old-divergence': 'One old divergence explains the fall',
 	'within-split-only': 'No relation across the whole tree; within the two sides of the root, overlap falls',
 	'none-detected': 'No detectable relation between overlap and age',
@@ -30,7 +31,7 @@ export function findFinding(facts: FindingFacts): Finding {
 }
 
 export function findingKind(facts: FindingFacts): FindingKind {
-	const { permutation, alpha, alternative, slope } = facts;
+	const { permutation, alpha, alternative, slope, signal } = facts;
 	if (permutation.smallestP > alpha) return 'too-few';
 	const falls = permutation.observed < 0;
 	const decisive = alternative === 'less' ? permutation.pLess : permutation.pTwoSided;
@@ -40,7 +41,8 @@ export function findingKind(facts: FindingFacts): FindingKind {
 	if (falls && decisive <= alpha) {
 		const within = permutation.withinDeepestSplit;
 		const couldSpeak = within !== null && within.smallestP <= alpha;
-		return couldSpeak && tailOf(within, alternative) > alpha ? 'one-old-divergence' : 'signal';
+		if (couldSpeak && tailOf(within, alternative) > alpha) return 'one-old-divergence';
+		return signal !== undefined && beyondRandomWalk(signal, alpha).length > 0 ? 'stronger-than-random-walk' : 'signal';
 	}
 	const within = permutation.withinDeepestSplit;
 	// A rise over the whole tree cannot be read as a fall: the restricted test may weaken a claim, never raise it.

@@ -2,7 +2,8 @@ import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import type { AgeUnit } from '#lib/contracts/materials.ts';
 import type { Measure } from '#lib/contracts/measure.ts';
 import type { Alternative } from '#lib/contracts/plan.ts';
-import type { TreesBlock } from '#lib/contracts/resultBlocks.ts';
+import type { TreeAbout } from '#lib/contracts/treeAbout.ts';
+import type { PowerBlock, SignalBlock, TreesBlock } from '#lib/contracts/resultBlocks.ts';
 
 /** What the words of a finding are chosen from: numbers already computed, and the plan's question. */
 export type FindingFacts = {
@@ -27,4 +28,10 @@ export type FindingFacts = {
 	readonly treesInSet?: number;
 	/** when the test averages over all of them */
 	readonly trees?: TreesBlock | undefined;
+	/** what the author of the tree has told; absent where nobody was asked */
+	readonly about?: TreeAbout;
+	/** signal in niche positions and what goes with them, when the plan asked for it */
+	readonly signal?: SignalBlock | undefined;
+	/** what this tree could have shown, when it was simulated */
+	readonly power?: PowerBlock | undefined;
 };

@@ -2,7 +2,8 @@ import type { FindingKind } from '#lib/contracts/analysisResult.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import { STATISTIC_WORDS } from './statisticWords.ts';
 import type { FindingFacts } from './findingFacts.ts';
-import { formatCount, formatFixed, formatP, formatSlope } from './numbers.ts';
+import { formatCount, formatFixed, formatP, formatShare, formatSlope } from './numbers.ts';
+import { beyondRandomWalk } from './signalSentence.ts';
 import { unitWords } from './units.ts';
 
 /** A stretch of the sentence; one with a key is a number that can be traced to where it came from. */
@@ -65,8 +66,13 @@ function closing(kind: FindingKind, facts: FindingFacts): SentencePart[] {
 					}
 				];
 	switch (kind) {
-		case 'signal':
 		case 'stronger-than-random-walk':
+			return [
+				{
+					text: `This is phylogenetic signal in niche overlap; in ${listed(facts.signal === undefined ? [] : beyondRandomWalk(facts.signal, facts.alpha))} relatives are nearer than a random walk along the tree would leave them. What held them together is not told.`
+				}
+			];
+		case 'signal':
 			return [{ text: 'This is phylogenetic signal in niche overlap; it is not yet evidence that niches were held back.' }];
 		case 'one-old-divergence':
 			return [
@@ -89,6 +95,19 @@ function closing(kind: FindingKind, facts: FindingFacts): SentencePart[] {
 				}
 			];
 		case 'none-detected':
-			return [{ text: 'No relation was detected. That is not evidence that there is none.' }];
+			return [{ text: `No relation was detected. That is not evidence that there is none.${detectable(facts)}` }];
 	}
+}
+
+/** What this design could have detected: fixed beforehand, never the effect that was found. */
+function detectable({ power, permutation }: FindingFacts): string {
+	const row = power?.rows.find(({ statistic }) => statistic === permutation.statistic);
+	if (power === undefined || row === undefined) return '';
+	const [least, most] = [Math.min(...row.power), Math.max(...row.power)];
+	return ` Had niches taken a random walk along this tree, this test would have found it in ${formatShare(least)} to ${formatShare(most)} of cases, by how fast and on how many axes they moved.`;
+}
+
+function listed(names: readonly string[]): string {
+	const last = names.at(-1) ?? 'niche position';
+	return names.length < 2 ? last : `${names.slice(0, -1).join(', ')} and ${last}`;
 }
