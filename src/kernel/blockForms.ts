@@ -83,7 +83,20 @@ function blockSum(task: BlockFormsTask, block: usize): f64 {
 		const x1 = matrix + <usize>load<i32>(row, 4) * tips;
 		const x2 = matrix + <usize>load<i32>(row, 8) * tips;
 		const x3 = matrix + <usize>load<i32>(row, 12) * tips;
-		for (let column = from; column < to; column += 4) {
+		let column = from;
+		for (; column + 8 <= to; column += 8) {
+			const cell = <usize>load<i32>(column);
+			const next = <usize>load<i32>(column, 4);
+			s0 += load<f64>(x0 + cell);
+			s1 += load<f64>(x1 + cell);
+			s2 += load<f64>(x2 + cell);
+			s3 += load<f64>(x3 + cell);
+			s0 += load<f64>(x0 + next);
+			s1 += load<f64>(x1 + next);
+			s2 += load<f64>(x2 + next);
+			s3 += load<f64>(x3 + next);
+		}
+		if (column < to) {
 			const cell = <usize>load<i32>(column);
 			s0 += load<f64>(x0 + cell);
 			s1 += load<f64>(x1 + cell);
