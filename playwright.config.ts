@@ -16,7 +16,7 @@ export default defineConfig({
 		launchOptions: browserLaunch
 	},
 	webServer: {
-		command: 'node build/commands/demo.mjs',
+		command: 'node --import tsx tests/e2e/support/serveExample.ts',
 		url: `http://127.0.0.1:${port}/health`,
 		timeout: 120_000,
 		reuseExistingServer: !process.env.CI,

@@ -3,19 +3,9 @@ import { mkdirSync } from 'node:fs';
 import { execFileSync } from 'node:child_process';
 import { expect, test, type Page } from '@playwright/test';
 import { meadowExpected, meadowMatrix, meadowTree, monteCarloRoom } from './support/meadow.ts';
+import { paste } from './support/paste.ts';
 
 const SHUFFLES = 99_999;
-
-/** Pastes as a person does: the whole text at once, from the clipboard. */
-async function paste(page: Page, text: string): Promise<void> {
-	const field = page.getByLabel('Paste or drop anything');
-	await field.focus();
-	await field.evaluate((element, pasted) => {
-		const clipboardData = new DataTransfer();
-		clipboardData.setData('text/plain', pasted);
-		element.dispatchEvent(new ClipboardEvent('paste', { clipboardData, bubbles: true, cancelable: true }));
-	}, text);
-}
 
 async function keep(page: Page): Promise<void> {
 	const button = page.getByRole('button', { name: 'Keep', exact: true });

@@ -36,7 +36,7 @@ export async function findPages(page: Page, address: string): Promise<ShownPage[
 	];
 }
 
-async function firstLink(page: Page, from: string, pattern: RegExp, text = ''): Promise<string> {
+export async function firstLink(page: Page, from: string, pattern: RegExp, text = ''): Promise<string> {
 	await page.goto(from);
 	const links = await page
 		.locator('a[href]')

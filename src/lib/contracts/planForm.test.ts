@@ -21,6 +21,15 @@ describe('planForm', () => {
 		expect(planForm.parse(values)).toMatchObject({ tree: 0, species: 'shared', permutations: 99_999, seed: 20_261, alpha: 0.05 });
 	});
 
+	it('reads all trees of a set, or the one that is named', () => {
+		const treeOf = (change: object) => planForm.parse({ ...values, ...change }).tree;
+		expect(treeOf({ tree: 'all', treeNumber: '7' })).toBe('all');
+		expect(treeOf({ tree: 'one', treeNumber: '7' })).toBe(7);
+		expect(treeOf({ tree: 'one' })).toBe(0);
+		expect(treeOf({ tree: '12', treeNumber: '7' })).toBe(12);
+		expect(planForm.safeParse({ ...values, tree: 'some' }).error?.issues[0]?.message).toContain('counted from 0');
+	});
+
 	it('reads one species a line, each once, blank lines aside', () => {
 		expect(planForm.parse({ ...values, species: 'Rana alba\r\n\n Rana nigra \nRana alba' }).species).toEqual([
 			'Rana alba',

@@ -15,6 +15,7 @@ import {
 export const PLAN_FIELDS = [
 	'treeSet',
 	'tree',
+	'treeNumber',
 	'overlapRun',
 	'species',
 	'statistic',
@@ -32,7 +33,13 @@ export type PlanField = (typeof PLAN_FIELDS)[number];
 export type PlanValues = Readonly<Record<PlanField, string>>;
 
 /** Fields that a plan begins without. */
-export const UNASKED = { alsoTest: '', clades: '', cladeTips: '3', declared: '' } as const satisfies Partial<PlanValues>;
+export const UNASKED = {
+	treeNumber: '0',
+	alsoTest: '',
+	clades: '',
+	cladeTips: '3',
+	declared: ''
+} as const satisfies Partial<PlanValues>;
 
 const wholeNumber = (rule: string, { from, to }: { from: number; to: number }) =>
 	z
@@ -58,6 +65,9 @@ const SEED_RULE = `A seed is a whole number from 0 to ${SEED_LIMIT.toLocaleStrin
 const SHUFFLE_RULE = `Shuffles are a whole number from 1 to ${PERMUTATION_LIMIT.toLocaleString('en')}.`;
 const ALPHA_RULE = 'The level is a number between 0 and 1, such as 0.05.';
 
+const TREE_RULE = 'Trees of a set are counted from 0: write a whole number.';
+const treeIndex = wholeNumber(TREE_RULE, { from: 0, to: 9999 });
+
 /** A clade a line, its species parted by commas or semicolons. */
 const cladesText = z
 	.string()
@@ -80,7 +90,9 @@ const CLADE_RULE = `The fewest species of a clade are a whole number from 2 to $
 export const planForm = z
 	.object({
 		treeSet: z.string('Choose a tree.').min(1, 'Choose a tree.'),
-		tree: wholeNumber('Trees of a set are counted from 0: write a whole number.', { from: 0, to: 9999 }),
+		/** all trees of the set, the one that `treeNumber` names, or a number itself, as an address may have it */
+		tree: z.union([z.enum(['all', 'one']), treeIndex], TREE_RULE),
+		treeNumber: treeIndex.default(0),
 		overlapRun: z.string('Choose a matrix.').min(1, 'Choose a matrix.'),
 		species: speciesText,
 		statistic: z.enum(STATISTICS, 'Choose what the relation is judged by.'),
@@ -102,16 +114,17 @@ export const planForm = z
 		path: ['declared'],
 		message: 'Name at least one clade: a line each, its species parted by commas.'
 	})
-	.transform(({ clades, cladeTips, declared, ...fields }): PlanRequest => {
+	.transform(({ clades, cladeTips, declared, tree, treeNumber, ...fields }): PlanRequest => {
 		const asked = { '': null, all: { minTips: cladeTips }, declared: { minTips: cladeTips, declared } }[clades];
-		return planRequestSchema.parse({ ...fields, clades: asked });
+		return planRequestSchema.parse({ ...fields, tree: tree === 'one' ? treeNumber : tree, clades: asked });
 	});
 
 /** A stored plan as the fields of the form. */
 export function planValues(plan: Plan): PlanValues {
 	return {
 		treeSet: plan.treeSet,
-		tree: plan.tree === 'all' ? '0' : String(plan.tree),
+		tree: plan.tree === 'all' ? 'all' : 'one',
+		treeNumber: plan.tree === 'all' ? UNASKED.treeNumber : String(plan.tree),
 		overlapRun: plan.overlapRun,
 		species: plan.species === 'shared' ? '' : plan.species.join('\n'),
 		statistic: plan.statistic,

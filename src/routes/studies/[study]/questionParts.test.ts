@@ -42,7 +42,7 @@ describe('questionParts', () => {
 	it('names the tree as the plan does, by its label, and one of several by its number', () => {
 		const on = (trees: QuestionFacts['trees']) => textOf({ ...empty, measure: 'schoener-d', trees });
 		expect(on({ label: 'Dated tree', treeCount: 1, tree: 'all' })).toContain(' on the dated tree?');
-		expect(on({ label: 'Sample', treeCount: 1200, tree: 'all' })).toContain(' on the 1,200 trees of “Sample”?');
+		expect(on({ label: 'Sample', treeCount: 1200, tree: 'all' })).toContain(' on all 1,200 trees of “Sample”?');
 		expect(on({ label: 'Sample', treeCount: 1200, tree: 7 })).toContain(' on tree 7 of “Sample”?');
 	});
 

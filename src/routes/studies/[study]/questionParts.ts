@@ -40,6 +40,5 @@ export function questionParts({ study, sharedSpecies, measure, trees, alternativ
 
 /** In the words of the plan: a tree goes by its label there and here. */
 function treesWords({ label, treeCount, tree }: NonNullable<QuestionFacts['trees']>): string {
-	if (treeCount > 1 && tree === 'all') return `the ${treeCount.toLocaleString('en')} trees of “${label}”`;
-	return treeWords({ label, treeCount }, tree === 'all' ? 0 : tree);
+	return treeWords({ label, treeCount }, tree);
 }

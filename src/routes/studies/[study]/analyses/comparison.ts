@@ -30,7 +30,7 @@ const NOTHING = 'no result';
 
 const TERMS: readonly { readonly term: string; readonly fact: (one: Compared) => string }[] = [
 	{ term: 'Matrix', fact: ({ run }) => measureWords(run) },
-	{ term: 'Tree', fact: ({ tree, plan }) => treeWords(tree, plan.tree === 'all' ? 0 : plan.tree) },
+	{ term: 'Tree', fact: ({ tree, plan }) => treeWords(tree, plan.tree) },
 	{ term: 'Species', fact: ({ plan }) => (plan.species === 'shared' ? 'all that are shared' : `${plan.species.length} chosen`) },
 	{ term: 'Direction', fact: ({ plan }) => wordsOf(ALTERNATIVE_CHOICES, plan.alternative) },
 	{ term: 'Statistic', fact: ({ plan }) => wordsOf(STATISTIC_CHOICES, plan.statistic) },

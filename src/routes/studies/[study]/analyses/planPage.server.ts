@@ -40,7 +40,7 @@ export async function planPage(access: Access, query: URLSearchParams) {
 	const base = (await startingValues(access, query)) ?? {
 		...{
 			treeSet: tree.id,
-			tree: '0',
+			tree: 'all',
 			overlapRun: run.id,
 			species: '',
 			statistic: 'slope',

@@ -15,6 +15,8 @@ describe('the words of a plan', () => {
 		expect(treeWords({ label: 'Darwin tree', treeCount: 1 }, 0)).toBe('the Darwin tree');
 		expect(treeWords({ label: 'The dated tree', treeCount: 1 }, 0)).toBe('The dated tree');
 		expect(treeWords({ label: 'posterior', treeCount: 200 }, 7)).toBe('tree 7 of “posterior”');
+		expect(treeWords({ label: 'posterior', treeCount: 1200 }, 'all')).toBe('all 1,200 trees of “posterior”');
+		expect(treeWords({ label: 'summary tree', treeCount: 1 }, 'all')).toBe('the summary tree');
 		expect(wordsOf(STATISTIC_CHOICES, 'slope')).toBe('the slope over all pairs');
 	});
 

@@ -71,10 +71,28 @@ type Trees = { readonly label: string; readonly treeCount: number };
 /** Words that a label begins with in a capital only because it stands alone. */
 const COMMON_WORD = /^(Summary|Consensus|Dated|Species|Posterior|Time)(?= )/;
 
-/** “the summary tree”, or which tree of a set. */
-export function treeWords({ label, treeCount }: Trees, tree: number): string {
+/** “the summary tree”, which tree of a set, or all of them. */
+export function treeWords({ label, treeCount }: Trees, tree: Plan['tree']): string {
 	const name = /^(the|a|an)\s/i.test(label) ? label : `the ${label.replace(COMMON_WORD, (word) => word.toLowerCase())}`;
-	return treeCount === 1 ? name : `tree ${tree} of “${label}”`;
+	if (treeCount === 1) return name;
+	return tree === 'all' ? `all ${treeCount.toLocaleString('en')} trees of “${label}”` : `tree ${tree} of “${label}”`;
+}
+
+/** What may be asked of a set of several trees. */
+export function treeChoices(treeCount: number): readonly Choice<'all' | 'one'>[] {
+	return [
+		{
+			value: 'all',
+			words: `averaged over all ${treeCount.toLocaleString('en')} trees`,
+			means: 'One test: the statistic is the mean over the trees, under the same shuffles. What the dating leaves open is in it.'
+		},
+		{ value: 'one', words: 'one tree only', means: 'The other trees are not looked at, and the findings say so.' }
+	];
+}
+
+/** The tree that the fields of a plan name. */
+export function treeAsked({ tree, treeNumber }: { readonly tree: string; readonly treeNumber: string }): Plan['tree'] {
+	return tree === 'all' ? 'all' : Number(tree === 'one' ? treeNumber : tree);
 }
 
 type AskedOf = {
@@ -87,7 +105,7 @@ type AskedOf = {
 export function askedWords({ run, tree, plan }: AskedOf): string {
 	const parts = [
 		measureWords(run),
-		treeWords(tree, plan.tree === 'all' ? 0 : plan.tree),
+		treeWords(tree, plan.tree),
 		wordsOf(STATISTIC_CHOICES, plan.statistic),
 		...(plan.species === 'shared' ? [] : [`${plan.species.length} chosen species`])
 	];

@@ -17,7 +17,7 @@ const QUESTIONS = { less: 'falls with age', greater: 'rises with age', 'two-side
 /** What was compared, for the margin. */
 export function comparedFacts({ tree, run }: Materials, { tree: index, species }: Pick<Plan, 'tree' | 'species'>): Fact[] {
 	return [
-		{ term: 'Tree', fact: treeWords(tree, index === 'all' ? 0 : index) },
+		{ term: 'Tree', fact: treeWords(tree, index) },
 		{ term: 'Overlap run', fact: run.label },
 		{ term: 'Measure', fact: MEASURE_NAMES[run.measure] },
 		{ term: 'Species', fact: species === 'shared' ? 'all that are shared' : `${formatCount(species.length)} chosen` }
