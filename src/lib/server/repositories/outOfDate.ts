@@ -61,7 +61,7 @@ async function lostTreeSet(access: Access, { id, label }: { id: string; label: s
 		.where(and(within(access, treeSets.studyId), eq(treeSets.replaces, id), isNull(treeSets.deletedAt)));
 	return newer[0] === undefined
 		? { code: 'tree-set-deleted', message: `The tree set “${label}” was deleted since.` }
-		: { code: 'tree-set-replaced', message: `The tree set “${label}” was replaced by “${newer[0].label}” since.` };
+		: { code: 'tree-set-replaced', message: replacedSince('tree set', label, newer[0].label) };
 }
 
 async function lostRun(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
@@ -71,7 +71,7 @@ async function lostRun(access: Access, { id, label }: { id: string; label: strin
 		.where(and(within(access, overlapRuns.studyId), eq(overlapRuns.replaces, id), isNull(overlapRuns.deletedAt)));
 	return newer[0] === undefined
 		? { code: 'overlap-run-deleted', message: `The overlap run “${label}” was deleted since.` }
-		: { code: 'overlap-run-replaced', message: `The overlap run “${label}” was replaced by “${newer[0].label}” since.` };
+		: { code: 'overlap-run-replaced', message: replacedSince('overlap run', label, newer[0].label) };
 }
 
 async function lostCovariate(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
@@ -81,7 +81,7 @@ async function lostCovariate(access: Access, { id, label }: { id: string; label:
 		.where(and(within(access, covariates.studyId), eq(covariates.replaces, id), isNull(covariates.deletedAt)));
 	return newer[0] === undefined
 		? { code: 'covariate-deleted', message: `The covariate “${label}” was deleted since.` }
-		: { code: 'covariate-replaced', message: `The covariate “${label}” was replaced by “${newer[0].label}” since.` };
+		: { code: 'covariate-replaced', message: replacedSince('covariate', label, newer[0].label) };
 }
 
 async function lostNicheTable(access: Access, { id, label }: { id: string; label: string }): Promise<Change> {
@@ -91,5 +91,11 @@ async function lostNicheTable(access: Access, { id, label }: { id: string; label
 		.where(and(within(access, nicheTables.studyId), eq(nicheTables.replaces, id), isNull(nicheTables.deletedAt)));
 	return newer[0] === undefined
 		? { code: 'niche-table-deleted', message: `The niche table “${label}” was deleted since.` }
-		: { code: 'niche-table-replaced', message: `The niche table “${label}” was replaced by “${newer[0].label}” since.` };
+		: { code: 'niche-table-replaced', message: replacedSince('niche table', label, newer[0].label) };
+}
+
+function replacedSince(what: string, label: string, newer: string): string {
+	return label === newer
+		? `The ${what} “${label}” was replaced since.`
+		: `The ${what} “${label}” was replaced by “${newer}” since.`;
 }

@@ -31,6 +31,7 @@ export async function studyHome(access: Access, study: string) {
 	const saved = await reports.list(access);
 	const pairs = (await names.matching(access))?.pairs ?? null;
 	const drawable = await openings.drawable(access, runs);
+	const renewed = new Set((await findRenewals(access, asked)).map(({ before }) => before));
 	const order = dataOrder(trees[0]?.tips ?? [], pairs ?? []);
 	return {
 		asked: questionParts({ study, sharedSpecies: pairs?.length ?? null, ...choicesOf({ trees, runs, plan: asked[0]?.plan }) }),
@@ -40,8 +41,12 @@ export async function studyHome(access: Access, study: string) {
 			runs.slice(0, WINGS_SHOWN).map(({ id, label }) => thumbnail(access, { id, label, order: drawable.has(id) ? order : null }))
 		),
 		moreRuns: Math.max(0, runs.length - WINGS_SHOWN),
-		analyses: await Promise.all(asked.slice(0, LINES_SHOWN).map((listed) => analysisLine(access, listed))),
-		wasRenewed: (await findRenewals(access, asked)).length > 0,
+		analyses: await Promise.all(
+			asked
+				.slice(0, LINES_SHOWN)
+				.map(async (listed) => ({ ...(await analysisLine(access, listed)), isRenewed: renewed.has(listed.id) }))
+		),
+		wasRenewed: renewed.size > 0,
 		moreAnalyses: Math.max(0, asked.length - LINES_SHOWN),
 		reports: await Promise.all(saved.slice(0, LINES_SHOWN).map((report) => reportLine(access, report, asked)))
 	};

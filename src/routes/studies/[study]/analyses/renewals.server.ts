@@ -4,6 +4,8 @@ import type { Access } from '#lib/server/access.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
 import { startAnalysis } from '#lib/server/api/startAnalysis.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as covariates from '#lib/server/repositories/covariates.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { inForce } from './inForce.server.ts';
@@ -15,7 +17,11 @@ export async function findRenewals(access: Access, asked: readonly analyses.List
 		await treeSets.list(access),
 		await treeSets.listDeleted(access),
 		await overlapRuns.list(access),
-		await overlapRuns.listDeleted(access)
+		await overlapRuns.listDeleted(access),
+		await covariates.list(access),
+		await covariates.listDeleted(access),
+		await nicheTables.list(access),
+		await nicheTables.listDeleted(access)
 	];
 	return renewals(asked, materials.flat());
 }

@@ -22,6 +22,15 @@ describe('renewals', () => {
 		expect(renewals(asked, MATERIALS)).toEqual([{ before: 'second', after: 'third' }]);
 	});
 
+	it('follows what an analysis allowed for, and its table of niche positions', () => {
+		const lines = [...MATERIALS, material('c2', 'c1'), material('n2', 'n1')];
+		const asking = (covariate: string, table: string) => ({
+			plan: { ...plan('t1', 'r1'), covariates: [covariate], signal: { variables: ['warmth'], table } }
+		});
+		const asked = [made('old', 1, asking('c1', 'n1')), made('new', 2, asking('c2', 'n2')), made('other', 3, asking('c9', 'n2'))];
+		expect(renewals(asked, lines)).toEqual([{ before: 'old', after: 'new' }]);
+	});
+
 	it('pairs two runs of one plan between which decisions about names changed', () => {
 		expect(renewals([made('old', 1), made('new', 2)], MATERIALS)).toEqual([{ before: 'old', after: 'new' }]);
 	});

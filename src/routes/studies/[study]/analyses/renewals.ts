@@ -42,7 +42,13 @@ function newestFirst(a: Asked, b: Asked): number {
 
 /** The plan with each material named by the first of its line. */
 function lineOf(plan: Plan, replaced: ReadonlyMap<string, string>): string {
-	const named = { ...plan, treeSet: first(replaced, plan.treeSet), overlapRun: first(replaced, plan.overlapRun) };
+	const named = {
+		...plan,
+		treeSet: first(replaced, plan.treeSet),
+		overlapRun: first(replaced, plan.overlapRun),
+		covariates: plan.covariates.map((id) => first(replaced, id)),
+		signal: plan.signal?.table === undefined ? plan.signal : { ...plan.signal, table: first(replaced, plan.signal.table) }
+	};
 	return JSON.stringify(Object.entries(named).sort(([a], [b]) => (a < b ? -1 : 1)));
 }
 

@@ -3,6 +3,7 @@ import { changeReasons, changeRows, changeSummary, type Told } from './changeTab
 
 const old: Told = {
 	...{ treeSetId: 't1', overlapRunId: 'r1', tree: { label: 'summary tree' }, run: { label: 'D' }, decisions: [] },
+	plan: { covariates: [], signal: null },
 	headline: { title: 'Overlap falls', species: 26 },
 	figures: { slope: '−0.0163 per Myr', p: '= 0.0016', within: '= 0.032' }
 };
@@ -32,6 +33,12 @@ describe('changeReasons', () => {
 		]);
 	});
 
+	it('names what else an analysis ran on', () => {
+		expect(changeReasons(old, { ...old, plan: { covariates: ['c2'], signal: null } })).toEqual(['A covariate was replaced.']);
+		const table = { covariates: [], signal: { variables: ['warmth'], table: 'n2' } };
+		expect(changeReasons(old, { ...old, plan: table })).toEqual(['The table of niche positions was replaced.']);
+	});
+
 	it('counts the names whose decision changed, each once', () => {
 		const decided = { ...old, decisions: [{ from: 'A b', to: 'A c' }] };
 		expect(changeReasons(old, decided)).toEqual(['One decision about a name changed.']);
@@ -56,6 +63,15 @@ describe('changeSummary', () => {
 			'6 analyses were run again: 1 now finds something else, 2 find the same with other numbers, ' +
 				'1 gives the same to the last digit shown, 1 ended without a result, 1 is still under way.'
 		);
-		expect(changeSummary([pair(old)])).toBe('One analysis was run again: 1 gives the same to the last digit shown.');
+	});
+
+	it.each([
+		[pair(old), 'gives the same to the last digit shown'],
+		[pair(moved), 'finds the same with other numbers'],
+		[pair(other), 'now finds something else'],
+		[pair(none), 'ended without a result'],
+		[pair(none, false), 'is still under way']
+	])('says of a single one what became of it', (one, words) => {
+		expect(changeSummary([one])).toBe(`One analysis was run again; it ${words}.`);
 	});
 });

@@ -1,5 +1,6 @@
 import type { HeadlineWords } from '#lib/analysis/words/headlineWords.ts';
 import { formatCount } from '#lib/analysis/words/numbers.ts';
+import type { Plan } from '#lib/contracts/plan.ts';
 
 /** What is needed of an analysis to tell it from the same one on other materials. */
 export type Told = {
@@ -7,6 +8,7 @@ export type Told = {
 	readonly overlapRunId: string;
 	readonly tree: { readonly label: string };
 	readonly run: { readonly label: string };
+	readonly plan: Pick<Plan, 'covariates' | 'signal'>;
 	readonly decisions: readonly { readonly from: string; readonly to: string | null }[];
 	readonly headline: { readonly title: string; readonly species: number } | null;
 	readonly figures: HeadlineWords | null;
@@ -48,6 +50,7 @@ export function changeReasons(before: Told, after: Told): string[] {
 	const reasons = [
 		before.treeSetId === after.treeSetId ? '' : replacedWords('tree', before.tree.label, after.tree.label),
 		before.overlapRunId === after.overlapRunId ? '' : replacedWords('matrix', before.run.label, after.run.label),
+		otherMaterials(before, after),
 		nameWords(before, after)
 	].filter((reason) => reason !== '');
 	return reasons.length > 0 ? reasons : ['A remark about the tree or the matrix was settled in another way.'];
@@ -55,6 +58,11 @@ export function changeReasons(before: Told, after: Told): string[] {
 
 function replacedWords(what: string, before: string, after: string): string {
 	return before === after ? `The ${what} “${before}” was replaced.` : `The ${what} “${before}” was replaced by “${after}”.`;
+}
+
+function otherMaterials({ plan: before }: Told, { plan: after }: Told): string {
+	if (before.covariates.join() !== after.covariates.join()) return 'A covariate was replaced.';
+	return before.signal?.table === after.signal?.table ? '' : 'The table of niche positions was replaced.';
 }
 
 function nameWords({ decisions: before }: Told, { decisions: after }: Told): string {
@@ -67,13 +75,16 @@ function nameWords({ decisions: before }: Told, { decisions: after }: Told): str
 	return changed.size === 1 ? 'One decision about a name changed.' : `${changed.size} decisions about names changed.`;
 }
 
+type Changed = { readonly rows: readonly ChangeRow[]; /** it does not wait or work any more */ readonly isOver: boolean };
+
 /** How many of the analyses that were run again find the same, in one sentence. */
-export function changeSummary(pairs: readonly { readonly rows: readonly ChangeRow[]; readonly isOver: boolean }[]): string {
+export function changeSummary(pairs: readonly Changed[]): string {
 	const done = pairs.filter(({ rows }) => rows.length > 0);
 	const other = done.filter(({ rows }) => rows[0]?.now !== null).length;
 	const same = done.filter(({ rows }) => rows.every(({ now }) => now === null)).length;
 	const pending = pairs.filter(({ isOver }) => !isOver).length;
 	const moved = done.length - other - same;
+	if (pairs.length === 1 && pairs[0] !== undefined) return `One analysis was run again; it ${onlyOne(pairs[0])}.`;
 	const parts = [
 		[other, 'now finds something else', 'now find something else'],
 		[moved, 'finds the same with other numbers', 'find the same with other numbers'],
@@ -82,6 +93,12 @@ export function changeSummary(pairs: readonly { readonly rows: readonly ChangeRo
 		[pending, 'is still under way', 'are still under way']
 	] as const;
 	const told = parts.flatMap(([count, one, many]) => (count === 0 ? [] : [`${count} ${count === 1 ? one : many}`]));
-	const whole = pairs.length === 1 ? 'One analysis was run again' : `${pairs.length} analyses were run again`;
-	return `${whole}: ${told.join(', ')}.`;
+	return `${pairs.length} analyses were run again: ${told.join(', ')}.`;
+}
+
+function onlyOne({ rows, isOver }: Changed): string {
+	if (!isOver) return 'is still under way';
+	if (rows.length === 0) return 'ended without a result';
+	if (rows[0]?.now !== null) return 'now finds something else';
+	return rows.every(({ now }) => now === null) ? 'gives the same to the last digit shown' : 'finds the same with other numbers';
 }
