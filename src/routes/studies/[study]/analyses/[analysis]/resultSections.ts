@@ -1,6 +1,7 @@
 import type { Component } from 'svelte';
 import { ALSO_TESTED, CLADES, SISTERS } from './cladeSections.ts';
 import { nodeSentence } from './nodeSentence.ts';
+import { TREES } from './treeSection.ts';
 import type { Findings } from './findingsView.ts';
 
 /**
@@ -27,6 +28,7 @@ export const RESULT_SECTIONS: readonly ResultSection[] = [
 		sentence: nodeSentence,
 		load: () => import('./sections/NodeAverages.svelte')
 	},
+	TREES,
 	ALSO_TESTED,
 	CLADES,
 	SISTERS
