@@ -1,5 +1,6 @@
 import type { AnalysisResult, PlateData } from '#lib/contracts/analysisResult.ts';
 import type { NodeAverage } from '#lib/contracts/drawnPlate.ts';
+import type { CladeRow } from '#lib/contracts/resultBlocks.ts';
 
 type Line = { readonly slope: number; readonly intercept: number };
 
@@ -13,6 +14,8 @@ export type PlateInput = {
 		readonly nested: Line | null;
 		readonly plain: Line | null;
 	};
+	/** clades that were asked about; those that hold are marked */
+	readonly clades?: readonly Pick<CladeRow, 'node' | 'holds'>[] | undefined;
 	/** null while nothing has been shuffled to the end */
 	readonly permutation: Pick<AnalysisResult['permutation'], 'count' | 'exact'> | null;
 };

@@ -32,7 +32,9 @@ export function dealtInput(input: PlateInput, dealt: readonly number[]): PlateIn
 		species: dealt.map((row) => species[row] ?? ''),
 		overlapLower: dealtOverlaps(overlapLower, dealt)
 	};
-	return { ...input, plate, nodeAverages: { ...input.nodeAverages, nodes: [], nested: null, plain: null } };
+	// What was found of the real arrangement is not drawn over another.
+	const nodeAverages = { ...input.nodeAverages, nodes: [], nested: null, plain: null };
+	return { ...input, plate, clades: undefined, nodeAverages };
 }
 
 function dealtOverlaps(lower: readonly number[], dealt: readonly number[]): number[] {
