@@ -88,6 +88,30 @@ describe('plateLayout', () => {
 		expect(layout.wing.top).toBeGreaterThan(bottom(layout.pairs));
 	});
 
+	// What is shown is never smaller than asked, and two names of one column never meet: a line of type is 1.1 of its size.
+	it('shows no name smaller than the smallest, in one column or in two', () => {
+		const more = fc.record({
+			maxHeight: fc.constantFrom(Infinity, 1200),
+			smallestName: fc.double({ min: 6, max: 11, noNaN: true })
+		});
+		fc.assert(
+			fc.property(sheets, more, ({ count, width, direction }, { maxHeight, smallestName }) => {
+				const { nameColumns, nameSize, pitch } = plateLayout(request(count, width, { direction, maxHeight, smallestName }));
+				if (nameColumns === 0) return;
+				expect(nameSize).toBeGreaterThanOrEqual(smallestName);
+				expect(nameSize * 1.1).toBeLessThanOrEqual(nameColumns * pitch * 1.2);
+			})
+		);
+	});
+
+	// By hand: rows of 8 give names of 8.48, under 9.5; two rows give 14, capped at 1.15 × 9.5. Rows of 3.4 give 5.95.
+	it('lets names stand in two columns before they give way to spans', () => {
+		const columns = (count: number, width = 1180) => plateLayout(request(count, width, { smallestName: 9.5 })).nameColumns;
+		expect([26, 80, 200].map((count) => columns(count))).toEqual([1, 2, 0]);
+		expect(columns(80, 390)).toBe(0); // a phone has no width for two
+		expect(plateLayout(request(80, 1180, { smallestName: 9.5 })).nameSize).toBeCloseTo(10.925, 9);
+	});
+
 	it('shrinks its rows until a page holds it', () => {
 		const layout = plateLayout(request(200, 845, { maxHeight: 1100 }));
 		expect(layout.height).toBeLessThanOrEqual(1100);

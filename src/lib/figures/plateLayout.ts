@@ -12,7 +12,7 @@ export type LayoutRequest = {
 	readonly direction: AgeDirection;
 	/** no sheet is higher than this; Infinity on screen */
 	readonly maxHeight: number;
-	/** names smaller than this give way to spans */
+	/** names that would be smaller than this stand in two columns by turns, and where that does not do, give way to spans */
 	readonly smallestName: number;
 };
 
@@ -24,7 +24,8 @@ export type PlateLayout = {
 	readonly direction: AgeDirection;
 	readonly pitch: number;
 	readonly nameSize: number;
-	readonly showNames: boolean;
+	/** one name a row; two columns by turns, so that a name has the height of two rows; or none but those of spans */
+	readonly nameColumns: 0 | 1 | 2;
 	readonly names: Rect;
 	/** names again beside a wing that stands below; null in the wide arrangement */
 	readonly wingNames: Rect | null;
@@ -39,7 +40,8 @@ export type PlateLayout = {
 
 /** One line of type; every other measure is told in it or was tried at it. */
 export const TYPE = 12;
-const STACKED_BELOW = 46 * TYPE;
+/** Narrower sheets have tree over d and the wing below. */
+export const STACKED_BELOW = 46 * TYPE;
 const EDGE = 2;
 const HEAD = 26;
 const AXIS = 54;
@@ -92,23 +94,40 @@ function pairsHeight(rest: number): number {
 	return Math.max(D_LEAST, (rest * D_SHARE) / (1 - D_SHARE));
 }
 
-function namesWidth(request: LayoutRequest, size: number, shown: boolean): number {
-	const widest = shown ? Math.max(...request.names.map((name) => textWidth(name, size))) : 10 * TYPE;
-	return clamp(widest + 2, 24, request.width * (shown ? 0.24 : 0.2));
+type Names = { readonly nameSize: number; readonly nameColumns: 0 | 1 | 2 };
+
+/** In two columns a name may be a little larger than the smallest, as far as two rows give room. */
+const STAGGERED = { rows: 1.75, mostOfSmallest: 1.15 } as const;
+
+function namesOf({ smallestName }: LayoutRequest, pitch: number, stacked: boolean): Names {
+	const single = nameSizeOf(pitch);
+	if (single >= smallestName) return { nameSize: single, nameColumns: 1 };
+	const staggered = Math.min(pitch * STAGGERED.rows, smallestName * STAGGERED.mostOfSmallest);
+	// A phone and a single column have no width for two.
+	if (stacked || staggered < smallestName) return { nameSize: single, nameColumns: 0 };
+	return { nameSize: staggered, nameColumns: 2 };
 }
 
-function sizes(request: LayoutRequest, pitch: number) {
-	const nameSize = nameSizeOf(pitch);
-	const showNames = nameSize >= request.smallestName;
-	const rows = request.names.length * pitch;
-	return { nameSize, showNames, rows, nameWidth: namesWidth(request, nameSize, showNames) };
+/** Between the two columns of names; drawing units. */
+export const NAME_GAP = 8;
+
+function namesWidth(request: LayoutRequest, { nameSize, nameColumns }: Names): number {
+	if (nameColumns === 0) return clamp(10 * TYPE, 24, request.width * 0.2);
+	const widest = Math.max(...request.names.map((name) => textWidth(name, nameSize))) + 2;
+	return nameColumns === 1 ? clamp(widest, 24, request.width * 0.24) : clamp(2 * widest + NAME_GAP, 24, request.width * 0.3);
+}
+
+function sizes(request: LayoutRequest, pitch: number, stacked: boolean) {
+	const names = namesOf(request, pitch, stacked);
+	return { ...names, rows: request.names.length * pitch, nameWidth: namesWidth(request, names) };
 }
 
 function wideLayout(request: LayoutRequest, pitch: number): PlateLayout {
-	const { nameSize, showNames, rows, nameWidth } = sizes(request, pitch);
+	const { nameSize, nameColumns, rows, nameWidth } = sizes(request, pitch, false);
 	const { width } = request;
 	const count = request.names.length;
-	const wingWidth = Math.min((count * pitch) / 2, width * 0.38);
+	// Two columns of names take their room from the wing, which can be drawn in; tree and pairs need theirs.
+	const wingWidth = Math.min((count * pitch) / 2, width * (nameColumns === 2 ? 0.3 : 0.38));
 	const left = Math.max(wingWidth + 8 + nameWidth + 8, width * 0.2 + AXIS_LABELS);
 	const endsWidth = clamp(width * 0.15, 84, 150);
 	const treeX = EDGE + left;
@@ -120,7 +139,7 @@ function wideLayout(request: LayoutRequest, pitch: number): PlateLayout {
 	const keyRight = treeX - AXIS_LABELS;
 	const wing: WingPlace = { count, top: HEAD, pitch, across: (wingWidth * 2) / count, edge: namesX - 8, outward: -1 };
 	return {
-		...{ width, height: rest + dHeight, stacked: false, direction: 'present-left', pitch, nameSize, showNames },
+		...{ width, height: rest + dHeight, stacked: false, direction: 'present-left', pitch, nameSize, nameColumns },
 		names: { x: namesX, y: HEAD, width: nameWidth, height: rows },
 		wingNames: null,
 		tree: { x: treeX, y: HEAD, width: treeWidth, height: rows },
@@ -138,7 +157,7 @@ function keyRect(rightEdge: number, y: number, { height, most }: { height: numbe
 }
 
 function stackedLayout(request: LayoutRequest, pitch: number): PlateLayout {
-	const { nameSize, showNames, rows, nameWidth } = sizes(request, pitch);
+	const { nameSize, nameColumns, rows, nameWidth } = sizes(request, pitch, true);
 	const { width } = request;
 	const count = request.names.length;
 	const treeX = EDGE + Math.max(nameWidth + 6, AXIS_LABELS + 44);
@@ -157,7 +176,7 @@ function stackedLayout(request: LayoutRequest, pitch: number): PlateLayout {
 	const wingHeight = wingPitch * count;
 	const keyRight = treeX - AXIS_LABELS;
 	return {
-		...{ width, height: wingTop + wingHeight + 6, stacked: true, direction: 'present-left', pitch, nameSize, showNames },
+		...{ width, height: wingTop + wingHeight + 6, stacked: true, direction: 'present-left', pitch, nameSize, nameColumns },
 		names: { x: treeX - 6 - nameWidth, y: HEAD, width: nameWidth, height: rows },
 		wingNames: { x: wing.edge + 8, y: wingTop, width: nameWidth, height: wingHeight },
 		tree: { x: treeX, y: HEAD, width: treeWidth, height: rows },

@@ -68,7 +68,7 @@ export function plateScene(input: PlateInput, request: SceneRequest): PlateScene
 	const texts = tickTexts(ticks);
 	return {
 		...{ input, model, layout, names, spacing, x, axis, treePlace, sizes },
-		spans: layout.showNames ? [] : spansFor(model, layout.pitch),
+		spans: layout.nameColumns > 0 ? [] : spansFor(model, layout.pitch),
 		wingSpans: nameSizeOf(layout.wing.pitch) >= request.smallestName ? [] : spansFor(model, layout.wing.pitch),
 		ageTicks: ticks.map((age, index) => ({ age, text: texts[index] ?? '' })),
 		tree: treeInk(model, treePlace),

@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { microPlate } from '#lib/figures/microPlate.fixture.ts';
+import { ladderPlate, microPlate } from '#lib/figures/microPlate.fixture.ts';
 import { renderPlatePdf } from './platePdf.ts';
 import { drawPlate, renderPlateSvg } from './plateSvg.ts';
 
@@ -43,6 +43,16 @@ describe('renderPlateSvg', () => {
 	it('draws even the narrowest figure without a negative size', () => {
 		expect(renderPlateSvg(microPlate(), { widthMm: 30 })).not.toMatch(/width="-|NaN/);
 		expect(renderPlateSvg(microPlate(), { widthMm: 84, typeSizePt: 14 })).not.toMatch(/width="-|NaN/);
+	});
+
+	// 6 pt is the least that journals print; by property for every size of tree from values in cells to spans.
+	it('prints no lettering under 6 pt', () => {
+		for (const count of [4, 12, 26, 60, 80, 100, 200]) {
+			const { svg: drawn, widthPt } = drawPlate(ladderPlate(count), {}, 'pt');
+			const units = Number(/viewBox="0 0 ([\d.]+) /.exec(drawn)?.[1]);
+			const sizes = [...drawn.matchAll(/font-size="([\d.]+)"/g)].map(([, size]) => (Number(size) * widthPt) / units);
+			expect(Math.min(...sizes), `${count} species`).toBeGreaterThanOrEqual(5.99);
+		}
 	});
 
 	it('keeps the width that was asked in every direction and palette', () => {

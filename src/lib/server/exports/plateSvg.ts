@@ -13,10 +13,8 @@ export type PlateSvg = { readonly svg: string; readonly widthPt: number; readonl
 const POINTS_PER_MM = 72 / 25.4;
 /** Higher than this does not fit a page of A4 with margins. */
 const MAX_HEIGHT_MM = 250;
-/** Names smaller than this are no longer read in print. */
-const SMALLEST_NAME_PT = 4.7;
-/** Journals want no lettering under 6 pt. */
-const SMALLEST_LABEL_PT = 6;
+/** Journals want no lettering under 6 pt: smaller names give way to two columns, and those to the names of clades. */
+const SMALLEST_TYPE_PT = 6;
 /** Narrower than this the panels have no room; the type of a very narrow figure gives way instead. */
 const LEAST_WIDTH = 280;
 /** A metric-compatible family first where it exists; the last one is what our own renderers embed. */
@@ -36,7 +34,7 @@ export function drawPlate(result: PlateInput, chosen: Partial<FigureSettings>, u
 		width: widthPt / pointsPerUnit,
 		direction: settings.ageDirection,
 		maxHeight: (MAX_HEIGHT_MM * POINTS_PER_MM) / pointsPerUnit,
-		smallestName: SMALLEST_NAME_PT / pointsPerUnit,
+		smallestName: SMALLEST_TYPE_PT / pointsPerUnit,
 		abbreviateGenus: settings.abbreviateGenus,
 		average: settings.average
 	});
@@ -44,7 +42,7 @@ export function drawPlate(result: PlateInput, chosen: Partial<FigureSettings>, u
 	const perUnit = unit === 'mm' ? 1 / POINTS_PER_MM : 1;
 	const size = (points: number) => `${Math.round(points * perUnit * 1000) / 1000}${unit === 'mm' ? 'mm' : ''}`;
 	const palette = writtenPalette(settings.palette, 'light');
-	const small = Math.max(11, Math.min(TYPE, SMALLEST_LABEL_PT / pointsPerUnit));
+	const small = Math.max(11, Math.min(TYPE, SMALLEST_TYPE_PT / pointsPerUnit));
 	const { body } = render(PlateDrawing, {
 		props: {
 			scene,
