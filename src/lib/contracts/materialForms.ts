@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { AGE_UNITS, TREE_SET_KINDS, type Confirm } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
+import { TIP_PLACEMENTS, treeAboutSchema, type TreeAbout } from './treeAbout.ts';
 
 /** An empty field of a form arrives as empty text. */
 const answer = <Schema extends z.ZodType>(schema: Schema) =>
@@ -44,6 +45,29 @@ export type MaterialName = { readonly kind: 'trees' | 'matrix'; readonly id: str
 export const materialForm = z.object({ material: materialSchema });
 export const renameMaterialForm = z.object({ material: materialSchema, label });
 export const settleMaterialForm = answersForm.extend({ material: materialSchema });
+
+const SPECIES_RULE = 'Living species of the clade are a whole number, such as 31; leave it empty when nobody knows.';
+const short = (what: string) => z.string().trim().max(1000, `${what} has at most 1,000 characters; shorten it.`).default('');
+
+/** What only the author of a tree knows, as a form holds it: one placed tip a line. */
+export const aboutTreeForm = z
+	.object({
+		material: materialSchema,
+		speciesInClade: answer(z.coerce.number(SPECIES_RULE).int(SPECIES_RULE).min(1, SPECIES_RULE).max(1_000_000, SPECIES_RULE)),
+		placement: z.enum(TIP_PLACEMENTS).default('unknown'),
+		placedTips: z.string().default(''),
+		calibration: short('What the ages rest on'),
+		source: short('A source')
+	})
+	.transform(({ material, speciesInClade, placedTips, ...rest }) => {
+		const tips = placedTips.split(/\r?\n/).map((line) => line.trim());
+		const about: TreeAbout = treeAboutSchema.parse({
+			...rest,
+			speciesInClade: speciesInClade ?? null,
+			placedTips: rest.placement === 'some-placed' ? [...new Set(tips.filter((tip) => tip !== ''))] : []
+		});
+		return { material, about };
+	});
 
 /** The answers that settle how a text is read. */
 export function confirmOf({ spread, valueKind, scale, triangle }: Answers): Confirm {

@@ -5,6 +5,7 @@ import type { Actions, PageServerLoad, RequestEvent } from './$types';
 import {
 	copyMaterial,
 	correctMaterial,
+	describeTree,
 	removeMaterial,
 	renameMaterial,
 	restoreMaterial,
@@ -56,6 +57,7 @@ export const actions: Actions = {
 	restore: restoreMaterial,
 	settle: settleMaterial,
 	correct: correctMaterial,
+	about: describeTree,
 	again: runAgain
 };
 

@@ -1,6 +1,7 @@
 import { pageWords } from '#lib/analysis/words/pageWords.ts';
 import { error, fail, redirect } from '@sveltejs/kit';
 import {
+	aboutTreeForm,
 	confirmOf,
 	materialForm,
 	renameMaterialForm,
@@ -88,6 +89,27 @@ export async function settleMaterial({ params, request, locals }: RequestEvent) 
 		return fail(422, { care: { ...care, message: pageWords(thrown.message) } });
 	}
 	redirect(303, pageOf(params.study));
+}
+
+/** What only the author of a tree knows. Names of placed tips that the tree does not have are refused, with what was typed. */
+export async function describeTree({ params, request, locals }: RequestEvent) {
+	const access = await can(locals.user, 'change', { study: params.study });
+	const form = await parseForm(request, aboutTreeForm);
+	if (!form.ok)
+		return fail(400, {
+			care: { material: form.values['material'] ?? '', values: form.values, message: Object.values(form.faults)[0] ?? NOT_FOUND }
+		});
+	const { material, about } = form.value;
+	const found = material.kind === 'trees' ? await treeSets.find(access, material.id) : null;
+	if (found === null) error(404, NOT_FOUND);
+	const unknown = about.placedTips.filter((tip) => !found.tips.includes(tip));
+	if (unknown.length > 0) {
+		const message = `“${found.label}” has no tip ${unknown.slice(0, 3).join(', ')}. Write the names as they stand in the tree, one a line.`;
+		const typed = { ...about, speciesInClade: String(about.speciesInClade ?? ''), placedTips: about.placedTips.join('\n') };
+		return fail(422, { care: { material: `${material.kind}:${material.id}`, values: typed, message } });
+	}
+	await treeSets.describe(access, material.id, about);
+	redirect(303, pageOf(params.study, `#material-${material.id}`));
 }
 
 /** The two of a run’s readings that a confirmation can hold on to. */

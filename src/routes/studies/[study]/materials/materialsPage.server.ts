@@ -1,6 +1,7 @@
 import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { MaterialName } from '#lib/contracts/materialForms.ts';
+import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { deletionOf, restorable, type Deletion } from '#lib/server/deletion.ts';
@@ -55,6 +56,7 @@ async function keptTree(set: TreeSet, { usedBy, staleFor, deletion }: Uses) {
 		questions: treeSettleQuestions(remarks, {}),
 		drawing: await drawTreeSet(set),
 		wing: null,
+		about: set.about ?? NOTHING_KNOWN,
 		offersCorrection: false
 	};
 }
@@ -81,6 +83,7 @@ async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, delet
 		questions: matrixSettleQuestions(run.remarks, {}).filter(({ isOpen }) => isOpen),
 		drawing: null,
 		wing: whole === null || !drawable.has(id) ? null : tinyWing(whole, order),
+		about: null,
 		offersCorrection: printed?.run === id && printed.remark.code === 'uncorrected-i'
 	};
 }
