@@ -8,7 +8,7 @@ test('every page of the example is accessible and fits, at a desk and on a phone
 	lead,
 	baseURL
 }) => {
-	test.setTimeout(240_000);
+	test.setTimeout(600_000);
 	const pages = await findPages(lead, baseURL ?? '');
 	const faults: string[] = [];
 	for (const reader of [page, lead]) reader.on('pageerror', (error) => faults.push(`${reader.url()}: ${error.message}`));
