@@ -175,7 +175,9 @@ describe('analyse, over trees that do not allow it', () => {
 
 	it('names the tree in which a common ancestor has age 0, when its logarithm is asked for', () => {
 		const zero = micro(MICRO_TREE, '(((A:0,B:0):2,C:2):2,D:4);');
-		expect(refusal(zero, microPlan({ ...ALL, statistic: 'slope-log-age' }))).toMatch(/^age-zero: In tree 2: The slope on the logarithm/);
+		expect(refusal(zero, microPlan({ ...ALL, statistic: 'slope-log-age' }))).toMatch(
+			/^age-zero: In tree 2: The slope on the logarithm/
+		);
 	});
 
 	it('says that the burn-in leaves none', () => {
