@@ -9,6 +9,8 @@ export const CLADES_LIMIT = 50;
 /** Seeds are whole numbers that a person can copy: 0 to 2³² − 1. */
 export const SEED_LIMIT = 0xffff_ffff;
 
+export const COVARIATES_LIMIT = 20;
+
 export type Statistic = (typeof STATISTICS)[number];
 export type Alternative = (typeof ALTERNATIVES)[number];
 
@@ -27,7 +29,7 @@ export const planRequestSchema = z.strictObject({
 	transform: z.enum(['none', 'logit']).default('none'),
 	permutations: z.number().int().min(1).max(PERMUTATION_LIMIT).default(9999),
 	seed: z.number().int().min(0).max(SEED_LIMIT).optional(),
-	covariates: z.array(id).max(20).default([]),
+	covariates: z.array(id).max(COVARIATES_LIMIT).default([]),
 	clades: z
 		.strictObject({
 			minTips: z.number().int().min(2).max(CLADE_LIMIT).default(3),

@@ -85,7 +85,7 @@ describe('planValues', () => {
 		const plan = planSchema.parse({ ...planForm.parse({ ...values, species: 'a\nb\nc\nd', transform: 'logit' }), tree: 3 });
 		expect(planSchema.parse(planForm.parse(planValues(plan)))).toEqual(plan);
 		const clades = { minTips: 4, declared: [['a', 'b', 'c']] };
-		const more = planSchema.parse({ ...plan, alsoTest: ['spearman', 'slope'], clades });
+		const more = planSchema.parse({ ...plan, alsoTest: ['spearman', 'slope'], clades, covariates: ['c', 'd'] });
 		expect(planSchema.parse(planForm.parse(planValues(more)))).toEqual(more);
 	});
 });

@@ -3,6 +3,7 @@ import {
 	ALTERNATIVES,
 	CLADE_LIMIT,
 	CLADES_LIMIT,
+	COVARIATES_LIMIT,
 	PERMUTATION_LIMIT,
 	planRequestSchema,
 	SEED_LIMIT,
@@ -27,7 +28,8 @@ export const PLAN_FIELDS = [
 	'alsoTest',
 	'clades',
 	'cladeTips',
-	'declared'
+	'declared',
+	'covariates'
 ] as const;
 export type PlanField = (typeof PLAN_FIELDS)[number];
 export type PlanValues = Readonly<Record<PlanField, string>>;
@@ -38,7 +40,8 @@ export const UNASKED = {
 	alsoTest: '',
 	clades: '',
 	cladeTips: '3',
-	declared: ''
+	declared: '',
+	covariates: ''
 } as const satisfies Partial<PlanValues>;
 
 const wholeNumber = (rule: string, { from, to }: { from: number; to: number }) =>
@@ -87,6 +90,8 @@ const cladesText = z
 
 const CLADE_RULE = `The fewest species of a clade are a whole number from 2 to ${CLADE_LIMIT.toLocaleString('en')}.`;
 
+const COVARIATE_RULE = `A plan allows for at most ${COVARIATES_LIMIT} covariates. Choose fewer.`;
+
 export const planForm = z
 	.object({
 		treeSet: z.string('Choose a tree.').min(1, 'Choose a tree.'),
@@ -108,7 +113,12 @@ export const planForm = z
 			.default([]),
 		clades: z.enum(['', 'all', 'declared'], 'Choose which clades are looked at.').default(''),
 		cladeTips: wholeNumber(CLADE_RULE, { from: 2, to: CLADE_LIMIT }).default(3),
-		declared: cladesText.default([])
+		declared: cladesText.default([]),
+		covariates: z
+			.string()
+			.transform((text) => [...new Set(linesOf(text))])
+			.pipe(z.array(z.string()).max(COVARIATES_LIMIT, COVARIATE_RULE))
+			.default([])
 	})
 	.refine(({ clades, declared }) => clades !== 'declared' || declared.length > 0, {
 		path: ['declared'],
@@ -136,6 +146,7 @@ export function planValues(plan: Plan): PlanValues {
 		alsoTest: plan.alsoTest.join('\n'),
 		clades: plan.clades === null ? '' : plan.clades.declared === undefined ? 'all' : 'declared',
 		cladeTips: String(plan.clades?.minTips ?? UNASKED.cladeTips),
-		declared: (plan.clades?.declared ?? []).map((names) => names.join(', ')).join('\n')
+		declared: (plan.clades?.declared ?? []).map((names) => names.join(', ')).join('\n'),
+		covariates: plan.covariates.join('\n')
 	};
 }

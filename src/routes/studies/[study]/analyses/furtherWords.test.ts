@@ -37,5 +37,6 @@ describe('furtherFacts', () => {
 		expect(furtherFacts({ ...plan, clades: { minTips: 3, declared: [['a', 'b']] } })).toEqual([
 			{ term: 'Clades', fact: '1 declared clade' }
 		]);
+		expect(furtherFacts({ ...plan, covariates: ['a', 'b'] })).toEqual([{ term: 'Allowed for', fact: '2 covariates' }]);
 	});
 });

@@ -18,12 +18,23 @@ export function cladeChoiceWords({ clades, cladeTips, declared }: Pick<PlanValue
 }
 
 /** What a plan asks beside its one test, for the margin; nothing where it asks nothing. */
-export function furtherFacts({ alsoTest, statistic, clades }: Plan): { readonly term: string; readonly fact: string }[] {
+export function furtherFacts({
+	alsoTest,
+	statistic,
+	clades,
+	covariates
+}: Plan): { readonly term: string; readonly fact: string }[] {
 	const further: Statistic[] = [...new Set(alsoTest)].filter((value) => value !== statistic);
 	return [
 		...(further.length === 0 ? [] : [{ term: 'Also tested', fact: furtherWords(further, statistic) }]),
+		...(covariates.length === 0 ? [] : [{ term: 'Allowed for', fact: covariateWords(covariates.length) }]),
 		...(clades === null ? [] : [{ term: 'Clades', fact: cladeFact(clades) }])
 	];
+}
+
+/** “no covariate”, “1 covariate”, “2 covariates”. */
+export function covariateWords(count: number): string {
+	return count === 0 ? 'no covariate' : `${formatCount(count)} ${count === 1 ? 'covariate' : 'covariates'}`;
 }
 
 function cladeFact({ minTips, declared }: NonNullable<Plan['clades']>): string {

@@ -7,6 +7,7 @@ import type { Access } from '#lib/server/access.ts';
 import { compute, ComputeRefusedError } from '#lib/server/jobs/pool.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import { computeArgument, decisionsFor } from '#lib/server/repositories/analysisInputs.ts';
+import * as kept from '#lib/server/repositories/covariates.ts';
 import * as names from '#lib/server/repositories/names.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
@@ -33,6 +34,13 @@ export async function planPage(access: Access, query: URLSearchParams) {
 			measure,
 			speciesCount: species.length,
 			createdAt
+		})),
+		covariates: (await kept.list(access)).map(({ id, label, reading, species }) => ({
+			id,
+			label,
+			unit: reading.unit,
+			scale: reading.scale,
+			speciesCount: species.length
 		}))
 	};
 	const [tree, run] = [trees.find(({ kind }) => kind === 'summary') ?? trees[0], runs[0]];

@@ -1,5 +1,6 @@
 import type { Component } from 'svelte';
 import { ALSO_TESTED, CLADES, SISTERS } from './cladeSections.ts';
+import { COVARIATES } from './covariateSections.ts';
 import { nodeSentence } from './nodeSentence.ts';
 import { TREES } from './treeSection.ts';
 import type { Findings } from './findingsView.ts';
@@ -30,6 +31,7 @@ export const RESULT_SECTIONS: readonly ResultSection[] = [
 	},
 	TREES,
 	ALSO_TESTED,
+	COVARIATES,
 	CLADES,
 	SISTERS
 ];
