@@ -163,15 +163,17 @@ export const fallBlockSchema = z.object({
 				/** mean residual of the youngest third of the nodes */
 				youngResidual: z.number(),
 				p: probability,
-				/** how often the same word comes up under a random walk on this tree, by simulation */
+				/** two-sided p, calibrated on simulated random walks; `size` is how often the uncalibrated word would be the same for one */
 				size: probability
 			})
 		})
 	),
-	/** half-overlap age (one axis) had all overlaps been floored or capped */
+	/** half-overlap age (one axis) of the same overlaps o over a floor shared by all pairs, floor + (1 - floor) o, or under a ceiling, ceiling · o */
 	withFloor: z.object({ floor: z.number(), halfOverlapAge: z.number().nullable() }),
 	withCeiling: z.object({ ceiling: z.number(), halfOverlapAge: z.number().nullable() }),
-	simulations: z.number().int()
+	simulations: z.number().int(),
+	/** of large trees only some species, evenly spaced in tree order, are simulated */
+	speciesSimulated: z.number().int()
 });
 
 export const influenceBlockSchema = z.object({
@@ -185,6 +187,9 @@ export const influenceBlockSchema = z.object({
 export const powerBlockSchema = z.object({
 	simulations: z.number().int(),
 	shuffles: z.number().int(),
+	/** of large trees only some species, evenly spaced in tree order, are simulated */
+	speciesSimulated: z.number().int(),
+	/** one-sided level: half of the plan's when it asked for both sides */
 	alpha: z.number(),
 	/** expected spread at the root, variance over 4 s² of the niche, and number of niche axes */
 	truths: z.array(z.object({ theta: z.number(), axes: z.number().int() })),

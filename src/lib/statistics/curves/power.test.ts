@@ -74,9 +74,9 @@ describe('statisticPower', () => {
 	});
 
 	it('finds nothing where the smallest p is above alpha', () => {
-		// By hand: (((A,B),C),D) leaves 12 orders of pairs apart by symmetry; with every order tied twice p is 2/24 at least.
+		// By hand: of 24 arrangements two are alike by the cherry, so exact p is 2/24 at least.
 		const four = exampleTree('(((A:1,B:1):1,C:2):2,D:4);');
-		const { rows } = statisticPower(four, { truths: POWER_TRUTHS, alpha: 0.01, simulations: 50, shuffles: 199, seed: 1 });
+		const { rows } = statisticPower(four, { truths: POWER_TRUTHS, alpha: 0.08, simulations: 50, shuffles: 199, seed: 1 });
 		for (const { power } of rows) expect(Math.max(...power)).toBe(0);
 	});
 });

@@ -1,5 +1,5 @@
 import { type AgedTree, treeShape } from '../agedTree.ts';
-import { type Group, identityArrangement, shuffleInPlace } from '../arrangements.ts';
+import { arrangementCount, type Group, identityArrangement, nextArrangementInPlace, shuffleInPlace } from '../arrangements.ts';
 import { type Functional, PERMUTATION_STATISTICS, type PermutationStatistic, weightedSum } from '../functionals.ts';
 import { midRanks } from '../midRanks.ts';
 import { type NodeSumsInput, nodeSumsOfBatch } from '../nodeSums.ts';
@@ -78,7 +78,10 @@ export type RejectionOptions = Pick<PowerOptions, 'alpha' | 'simulations' | 'shu
 	readonly within?: boolean;
 };
 
-/** Share of drawn matrices in which each statistic's lower tail, p = (b + 1) / (m + 1), is at most alpha. */
+/**
+ * Share of drawn matrices in which each statistic's lower tail is at most alpha: p = (b + 1) / (m + 1), or exact where all
+ * arrangements are no more than the shuffles.
+ */
 export function rejectionShares(
 	tree: AgedTree,
 	draw: OverlapDraw,
@@ -88,15 +91,19 @@ export function rejectionShares(
 	// Weights hang on the tree alone; of the matrix they only need that it varies, and of ranks only their scale does not.
 	const design = preparePermutation({ tree, overlap: unlikeOverlap(tipCount) });
 	const tested = design.functionals.filter(isTested);
-	const arrangements = new Int32Array((shuffles + 1) * tipCount);
-	const most = Math.floor(alpha * (shuffles + 1) + ROUNDING) - 1;
+	const groups = within ? design.within : design.free;
+	const isExact = arrangementCount(groups) <= shuffles;
+	const count = isExact ? arrangementCount(groups) : shuffles + 1;
+	const arrangements = new Int32Array(count * tipCount);
+	if (isExact) arrangeAllInPlace(arrangements, { groups, tipCount });
+	const most = Math.floor(alpha * count + ROUNDING) - 1;
 	const rejected = tested.map(() => 0);
 	for (let simulation = 0; simulation < simulations; simulation++) {
 		const stream = randomStream(seed, firstChunk + simulation, STREAM_DOMAIN.power);
 		const overlap = draw(stream);
-		arrangeInPlace(arrangements, stream, { groups: within ? design.within : design.free, tipCount });
+		if (!isExact) arrangeInPlace(arrangements, stream, { groups, tipCount });
 		const counts = lowerTails({ ...design, overlap }, tested, arrangements);
-		for (const [i, count] of counts.entries()) if (count <= most) rejected[i] = (rejected[i] ?? 0) + 1;
+		for (const [i, asLow] of counts.entries()) if (asLow <= most) rejected[i] = (rejected[i] ?? 0) + 1;
 	}
 	return new Map(tested.map(({ statistic }, i) => [statistic, (rejected[i] ?? 0) / simulations]));
 }
@@ -117,6 +124,18 @@ function arrangeInPlace(
 	for (let from = 0; from < arrangements.length; from += tipCount) {
 		if (from > 0) for (const group of groups) shuffleInPlace(arrangement, stream, group);
 		arrangements.set(arrangement, from);
+	}
+}
+
+/** All arrangements, the identity first. */
+function arrangeAllInPlace(
+	arrangements: Int32Array,
+	{ groups, tipCount }: { readonly groups: readonly Group[]; readonly tipCount: number }
+): void {
+	const arrangement = identityArrangement(tipCount);
+	for (let from = 0; from < arrangements.length; from += tipCount) {
+		arrangements.set(arrangement, from);
+		nextArrangementInPlace(arrangement, groups);
 	}
 }
 
