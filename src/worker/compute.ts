@@ -16,6 +16,9 @@ type Handlers = {
 		report: (progress: ComputeProgress) => void
 	) => ThreadTasks[Task]['answer'];
 };
+/** A chunk of shuffles may take less than a tenth of a millisecond; each message costs the listening thread as much. */
+const MESSAGE_EVERY_MS = 20;
+
 const tasks: Handlers = { ...computeTasks, ...drawingTasks };
 
 type Message<Task extends ThreadTask> = {
@@ -29,7 +32,7 @@ export default async function answer<Task extends ThreadTask>({
 	argument,
 	port
 }: Message<Task>): Promise<ThreadOutcome<Task>> {
-	const report = (progress: ComputeProgress) => port?.postMessage(progress);
+	const report = atIntervals((progress) => port?.postMessage(progress));
 	try {
 		return { ok: true, value: await tasks[task](argument, report) };
 	} catch (thrown) {
@@ -39,6 +42,17 @@ export default async function answer<Task extends ThreadTask>({
 	} finally {
 		port?.close();
 	}
+}
+
+/** The first message at once, then one in so many milliseconds; between them nobody could see a difference. */
+function atIntervals(post: (progress: ComputeProgress) => void): (progress: ComputeProgress) => void {
+	let next = 0;
+	return (progress) => {
+		const now = performance.now();
+		if (now < next) return;
+		next = now + MESSAGE_EVERY_MS;
+		post(progress);
+	};
 }
 
 /** Some refusals carry what was noticed on the way; the sciences may add `remarks` to the error. */

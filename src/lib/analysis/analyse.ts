@@ -11,7 +11,7 @@ import { mantelMoments } from '#lib/statistics/mantelMoments.ts';
 import { nodeAverages } from '#lib/statistics/nodeAverages.ts';
 import { lowerTriangle } from '#lib/statistics/pairValues.ts';
 import { preparePermutation } from '#lib/statistics/permutationDesign.ts';
-import { type PermutationOutcome, permutationTest } from '#lib/statistics/permutationTest.ts';
+import { type PermutationOutcome, permutationTest, type SharedTallies } from '#lib/statistics/permutationTest.ts';
 import { alsoTested, declaredStatistics } from './alsoTested.ts';
 import { resultBlocks } from './blocks/resultBlocks.ts';
 import { findingOf } from './findingOf.ts';
@@ -21,6 +21,7 @@ import { plateData } from './plateData.ts';
 import { prepareAnalysis, type PreparedAnalysis } from './prepareAnalysis.ts';
 import { progressReporter } from './progressReporter.ts';
 import { refuseAgeZero } from './refuseAgeZero.ts';
+import { testOptions } from './testOptions.ts';
 import { judgeOverTrees } from './trees/judgeOverTrees.ts';
 
 /** Changes whenever a published number could change; printed in every report. */
@@ -32,28 +33,31 @@ export type Report = (progress: AnalysisProgress) => void;
  * The whole analysis: a pure function of its inputs and its plan, which holds the seed. Equal arguments give equal bits.
  *
  * @param report - told after every chunk of shuffles; it may throw to stop
+ * @param shares - of its shuffles that `analyseShare` has run; together all of them, or none
  * @throws {InputError} with a sentence when the materials do not allow the analysis; see `prepareAnalysis`
  */
-export function analyse(inputs: AnalysisInputs, plan: Plan, report?: Report): AnalysisResult {
+export function analyse(
+	inputs: AnalysisInputs,
+	plan: Plan,
+	report?: Report,
+	shares: readonly SharedTallies[] = []
+): AnalysisResult {
 	const prepared = prepareAnalysis(inputs, plan);
 	const { tree, ages, species, response } = prepared;
 	const pairAges = mrcaAges(tree, ages);
 	const lower = { ages: lowerTriangle(pairAges, species.length), overlaps: lowerTriangle(response, species.length) };
 	const line = pick(linearRegression(lower.ages, lower.overlaps));
 
-	const statistics = declaredStatistics(plan);
-	const design = preparePermutation({ tree: { parent: tree.parent, ages }, overlap: response, statistics });
+	const design = preparePermutation({
+		tree: { parent: tree.parent, ages },
+		overlap: response,
+		statistics: declaredStatistics(plan)
+	});
 	refuseAgeZero(design, plan);
 	const reporter = report && progressReporter({ plan, regression: line, lower, report });
 	const overTrees = judgeOverTrees({ prepared, plan, design, onProgress: reporter });
 	const onProgress = overTrees?.onProgress ?? reporter;
-	const outcome = permutationTest(design, {
-		permutations: plan.permutations,
-		seed: plan.seed,
-		keep: [...new Set(['nodes-plain', ...statistics] as const)],
-		withinStatistics: statistics,
-		...(onProgress ? { onProgress } : {})
-	});
+	const outcome = permutationTest(design, { ...testOptions(plan), shares, ...(onProgress ? { onProgress } : {}) });
 
 	const moments = mantelMoments(pairAges, response);
 	const compared = describeCompared(prepared, inputs, plan, lower.overlaps);

@@ -2,6 +2,7 @@ import type { ComputeProgress, ComputeTask, ComputeTasks } from '#lib/contracts/
 import { matrixFromBody, readMatrix } from '#lib/overlap/readMatrix.ts';
 import { readNicheTable } from '#lib/overlap/readNicheTable.ts';
 import { analyse } from './analyse.ts';
+import { analyseShare } from './analyseShare.ts';
 import { readCovariateMaterial } from './covariates/readCovariateMaterial.ts';
 import { previewAnalysis } from './previewAnalysis.ts';
 import { pairAges, readTreeFacts, treeStructure } from './readTreeFacts.ts';
@@ -24,5 +25,6 @@ export const computeTasks: Handlers = {
 	mrcaAges: ({ text, tree, spreadConfirmed, species }) =>
 		pairAges(text, tree, { spreadConfirmed, ...(species ? { species } : {}) }),
 	preview: ({ inputs, plan }) => previewAnalysis(inputs, plan),
-	analyse: ({ inputs, plan }, report) => analyse(inputs, plan, report)
+	analyseShare: ({ inputs, plan, share }, report) => analyseShare({ inputs, plan, share }, report),
+	analyse: ({ inputs, plan, shares }, report) => analyse(inputs, plan, report, shares)
 };

@@ -2,6 +2,7 @@ import type { AnalysisProgress } from '#lib/contracts/analysisResult.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import { monteCarloError, permutationPValue } from '#lib/statistics/permutationPValue.ts';
 import type { PermutationProgress } from '#lib/statistics/permutationTest.ts';
+import type { TailCounts } from '#lib/statistics/tally.ts';
 
 /** Lines passed on from each chunk: enough to see the fan grow, few enough to send. */
 const LINES_PER_CHUNK = 4;
@@ -18,18 +19,18 @@ export function progressReporter({ plan, regression, lower, report }: Reporting)
 	const still = { slope: regression.slope, meanAge: mean(lower.ages), meanOverlap: mean(lower.overlaps) };
 	let known = { asExtreme: 0, p: 1, monteCarloStandardError: 0 };
 	return ({ question, done, total, asked, newSlopes }) => {
-		if (question === 'free') known = soFar(plan, asked) ?? known;
+		const counts = asked.counts[plan.statistic];
+		if (question === 'free' && counts) known = pSoFar(plan, { done: asked.done, counts });
 		report({ done, total, ...known, ...still, newSlopes: [...newSlopes.subarray(0, LINES_PER_CHUNK)] });
 	};
 }
 
-function soFar(
+/** p of the shuffles so far in the tail of the plan, with its error. */
+export function pSoFar(
 	plan: Plan,
-	asked: PermutationProgress['asked']
-): Pick<AnalysisProgress, 'asExtreme' | 'p' | 'monteCarloStandardError'> | null {
-	const counts = asked.counts[plan.statistic];
-	if (counts === undefined) return null;
-	const { pLess, pGreater, pTwoSided } = permutationPValue(counts, asked.done, false);
+	{ done, counts }: { readonly done: number; readonly counts: TailCounts }
+): Pick<AnalysisProgress, 'asExtreme' | 'p' | 'monteCarloStandardError'> {
+	const { pLess, pGreater, pTwoSided } = permutationPValue(counts, done, false);
 	const p = plan.alternative === 'less' ? pLess : plan.alternative === 'greater' ? pGreater : pTwoSided;
 	const asExtreme =
 		plan.alternative === 'less'
@@ -37,7 +38,7 @@ function soFar(
 			: plan.alternative === 'greater'
 				? counts.greater
 				: Math.min(counts.less, counts.greater);
-	return { asExtreme, p, monteCarloStandardError: monteCarloError(p, asked.done) };
+	return { asExtreme, p, monteCarloStandardError: monteCarloError(p, done) };
 }
 
 function mean(values: Float64Array): number {

@@ -3,6 +3,8 @@ import type { NicheTableRequest } from './nicheTables.ts';
 import type { NicheTable } from '#lib/overlap/nicheTable.ts';
 import type { MatrixReading } from '#lib/overlap/matrixReading.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
+import type { SharedTallies } from '#lib/statistics/permutationTest.ts';
+import type { ChunkShare } from '#lib/statistics/shuffleBatches.ts';
 import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
 import type { Plan } from './plan.ts';
 import type { AgeUnit, Confirm, OverlapRunRequest } from './materials.ts';
@@ -112,12 +114,18 @@ export type ComputeTasks = {
 		answer: { species: readonly string[]; values: Float64Array };
 	};
 	preview: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: AnalysisPreview };
-	analyse: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: AnalysisResult };
+	/** some chunks of the shuffles of an analysis that several threads share */
+	analyseShare: { argument: { inputs: AnalysisInputs; plan: Plan; share: ChunkShare }; answer: SharedTallies };
+	/** with the shares of its shuffles where others have run them */
+	analyse: { argument: { inputs: AnalysisInputs; plan: Plan; shares?: readonly SharedTallies[] }; answer: AnalysisResult };
 };
 export type ComputeTask = keyof ComputeTasks;
 
-/** What the thread posts on the progress port while `analyse` runs. */
-export type ComputeProgress = AnalysisProgress;
+/** What the thread posts on the progress port while `analyse` or `analyseShare` runs. */
+export type ComputeProgress = AnalysisProgress & {
+	/** of a share: its own shuffles of the plan's question, from which p over all shares is made */
+	readonly share?: { readonly done: number; readonly less: number; readonly greater: number };
+};
 
 /** An InputError that crossed a thread boundary. */
 export type ComputeRefusal = {

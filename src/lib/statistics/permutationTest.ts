@@ -2,7 +2,7 @@ import type { CountedStatistic, PermutationStatistic } from './functionals.ts';
 import type { PermutationDesign } from './permutationDesign.ts';
 import { permutationPValue, type TailProbabilities } from './permutationPValue.ts';
 import { chunksOf, enumerateInBatches, tallyChunks } from './runChunks.ts';
-import { plannedArrangements } from './shuffleBatches.ts';
+import { type ChunkShare, plannedArrangements } from './shuffleBatches.ts';
 import { addCounts, mergeTallies, type TailCounts, type Tally } from './tally.ts';
 
 export type TestedStatistic = TailCounts & TailProbabilities & { readonly observed: number };
@@ -43,9 +43,14 @@ export type PermutationOptions = {
 	readonly keep?: readonly PermutationStatistic[];
 	/** statistics counted within the deepest split; all of the design unless told otherwise, fewer are faster */
 	readonly withinStatistics?: readonly PermutationStatistic[];
+	/** shares run before, together all chunks of the questions that they hold */
+	readonly shares?: readonly SharedTallies[];
 	/** called after every chunk or batch; it may throw to stop the test */
 	readonly onProgress?: (progress: PermutationProgress) => void;
 };
+
+/** The chunks of one share of a test; null for a question that is enumerated or cannot be asked, which is not shared. */
+export type SharedTallies = { readonly free: Tally | null; readonly within: Tally | null };
 
 /**
  * Tests whether overlap goes with age, by moving species over the tips of the tree: freely, and again within the
@@ -57,6 +62,17 @@ export function permutationTest(design: PermutationDesign, options: PermutationO
 	const free = askQuestion(design, false, { ...options, report });
 	const within = design.within.length === 0 ? null : askQuestion(design, true, { ...options, report });
 	return outcomeOf(design, options.permutations, { free, within });
+}
+
+/**
+ * The part of a test that falls to some of its chunks, in both questions. Shares may be run anywhere and in any order;
+ * given to `permutationTest` together they make the bits that it would make alone.
+ */
+export function tallyShare(design: PermutationDesign, share: ChunkShare, options: PermutationOptions): SharedTallies {
+	const report = { done: 0, total: plannedTotal(design, options.permutations) };
+	const ask = (within: boolean) =>
+		isExact(design, within, options.permutations) ? null : askQuestion(design, within, { ...options, report, share });
+	return { free: ask(false), within: design.within.length === 0 ? null : ask(true) };
 }
 
 /** The tallies of both questions, whoever ran them, read as p-values. */
@@ -97,14 +113,17 @@ function nullOutcome(design: PermutationDesign, tally: Tally, exact: boolean): N
 	return { exact, count: tally.arrangements, statistics, values: tally.values };
 }
 
-type Asking = PermutationOptions & { readonly report: { done: number; readonly total: number } };
+type Asking = PermutationOptions & {
+	readonly report: { done: number; readonly total: number };
+	readonly share?: ChunkShare;
+};
 
 function askQuestion(design: PermutationDesign, within: boolean, asking: Asking): Tally {
 	const { report, onProgress } = asking;
 	const tallies: Tally[] = [];
 	let counts: Tally['counts'] = {};
 	let done = 0;
-	for (const tally of talliesOf(design, within, asking)) {
+	for (const tally of sharedTallies(within, asking) ?? talliesOf(design, within, asking)) {
 		tallies.push(tally);
 		counts = addCounts([{ counts }, tally]);
 		done += tally.arrangements;
@@ -120,12 +139,19 @@ function askQuestion(design: PermutationDesign, within: boolean, asking: Asking)
 	return mergeTallies(tallies);
 }
 
-function talliesOf(design: PermutationDesign, within: boolean, options: PermutationOptions): Generator<Tally> {
+/** The question's tallies of the shares as one; null where it was not shared. */
+function sharedTallies(within: boolean, { shares = [] }: Asking): readonly Tally[] | null {
+	const given = shares.flatMap(({ free, within: inside }) => (within ? inside : free) ?? []);
+	return given.length > 0 ? [mergeTallies(given)] : null;
+}
+
+function talliesOf(design: PermutationDesign, within: boolean, options: Asking): Generator<Tally> {
 	const { permutations, seed, keep = ['nodes-plain', 'nodes-nested'], withinStatistics } = options;
 	// Within the split nothing is drawn, so its values are only memory.
 	const kept: CountedStatistic[] = within ? [] : ['slope', ...keep];
 	const statistics = within && withinStatistics ? { statistics: withinStatistics } : {};
 	const wanted = { within, keep: kept, ...statistics };
 	if (isExact(design, within, permutations)) return enumerateInBatches(design, wanted);
-	return tallyChunks(design, { ...wanted, seed, firstChunk: 0, chunkCount: chunksOf(permutations), shuffles: permutations });
+	const { share = { firstChunk: 0, chunkCount: chunksOf(permutations) } } = options;
+	return tallyChunks(design, { ...wanted, ...share, seed, shuffles: permutations });
 }

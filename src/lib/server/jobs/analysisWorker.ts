@@ -9,8 +9,8 @@ import type { AnalysisEvent } from './analysisEvents.ts';
 import type { AnalysisFailure, AnalysisStore } from './analysisStore.ts';
 import * as heartbeat from './heartbeat.ts';
 import { joinProgress } from './joinProgress.ts';
-import { compute } from './pool.ts';
 import { ANALYSES, MOST_ATTEMPTS, type AnalysisJob, type JobQueue } from './queue.ts';
+import { shareAnalysis } from './shareAnalysis.ts';
 
 export type AnalysisWorker = {
 	/** analyses that run in this process */
@@ -147,7 +147,7 @@ async function runAnalysis(run: RunningAnalysis, { store, progress }: Surroundin
 	};
 	try {
 		const { inputs, plan } = await store.inputsOf(access, run.id);
-		const result = await compute('analyse', { inputs, plan }, { onProgress, signal: run.stop.signal });
+		const result = await shareAnalysis({ inputs, plan }, { onProgress, signal: run.stop.signal });
 		await store.markFinished(access, run.id, result);
 		return { type: 'finished' };
 	} catch (thrown) {
