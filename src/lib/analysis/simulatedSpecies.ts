@@ -4,7 +4,7 @@ import { tipIndices } from '#lib/phylogeny/tree.ts';
 import type { PreparedAnalysis } from './prepareAnalysis.ts';
 
 /** Thousands of simulations of so many species take about two seconds; the time grows with the square of their number. */
-export const MOST_SIMULATED = 200;
+export const MOST_SIMULATED = 120;
 
 type Simulated = Pick<PreparedAnalysis, 'tree' | 'ages' | 'species' | 'overlap'>;
 

@@ -1,7 +1,6 @@
 import { type AgedTree, treeShape } from '../agedTree.ts';
 import { arrangementCount, type Group, identityArrangement, nextArrangementInPlace, shuffleInPlace } from '../arrangements.ts';
 import { type Functional, PERMUTATION_STATISTICS, type PermutationStatistic, weightedSum } from '../functionals.ts';
-import { midRanks } from '../midRanks.ts';
 import { type NodeSumsInput, nodeSumsOfBatch } from '../nodeSums.ts';
 import { lowerTriangle, symmetricMatrix } from '../pairValues.ts';
 import { preparePermutation } from '../permutationDesign.ts';
@@ -141,7 +140,7 @@ function arrangeAllInPlace(
 
 /** Of each functional, the arrangements after the first whose value is as low as the first's; ties count. */
 function lowerTails({ layout, overlap, tipCount }: NodeSumsInput, tested: readonly Tested[], arrangements: Int32Array): number[] {
-	const ranks = symmetricMatrix(midRanks(lowerTriangle(overlap, tipCount)), tipCount, 0);
+	const ranks = symmetricMatrix(drawnRanks(lowerTriangle(overlap, tipCount)), tipCount, 0);
 	const slots = layout.pairs.length;
 	const batch = { count: arrangements.length / tipCount, arrangements };
 	const sums = nodeSumsOfBatch({ layout, overlap, tipCount }, batch);
@@ -158,6 +157,17 @@ function lowerTails({ layout, overlap, tipCount }: NodeSumsInput, tested: readon
 		}
 		return count;
 	});
+}
+
+/** Mid-ranks of drawn numbers, which tie only where they are equal: a few hundred of them, thousands of times. */
+function drawnRanks(values: Float64Array): Float64Array {
+	const sorted = Float64Array.from(values).sort();
+	const ranks = new Map<number, number>();
+	for (let from = 0, to = 0; from < sorted.length; from = to) {
+		while (to < sorted.length && sorted[to] === sorted[from]) to++;
+		ranks.set(sorted[from] ?? 0, (from + to + 1) / 2);
+	}
+	return values.map((value) => ranks.get(value) ?? 0);
 }
 
 /** Share of Σ|o w| within which values tie, as in the test itself: symmetric arrangements differ by rounding only. */
