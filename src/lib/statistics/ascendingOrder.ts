@@ -8,6 +8,7 @@ type Keys = { readonly low: Uint32Array; readonly high: Uint32Array };
 /**
  * Where the values stand in ascending order, equal ones in the order given; −0 equals 0. A radix sort over the bits of
  * the numbers: for the two million pairs of 2,000 species it takes a third of the time of
+ * comparing them.
  *
  * @param values - shape (n,); finite
  * @returns shape (n,); `values[order[0]]` is the smallest. Cost: linear.
