@@ -1,6 +1,6 @@
 import type { AnalysisResult, PlateData } from '#lib/contracts/analysisResult.ts';
 import type { NodeAverage } from '#lib/contracts/drawnPlate.ts';
-import type { CladeRow } from '#lib/contracts/resultBlocks.ts';
+import type { CladeRow, TreesBlock } from '#lib/contracts/resultBlocks.ts';
 
 type Line = { readonly slope: number; readonly intercept: number };
 
@@ -16,6 +16,8 @@ export type PlateInput = {
 	};
 	/** clades that were asked about; those that hold are marked */
 	readonly clades?: readonly Pick<CladeRow, 'node' | 'holds'>[] | undefined;
+	/** lines and node ages of all trees, where the test averages over them */
+	readonly trees?: Pick<TreesBlock, 'lines' | 'nodes'> | undefined;
 	/** null while nothing has been shuffled to the end */
 	readonly permutation: Pick<AnalysisResult['permutation'], 'count' | 'exact'> | null;
 };

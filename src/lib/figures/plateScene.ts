@@ -10,6 +10,7 @@ import { ageRange, nameSizeOf, plateLayout, TYPE, type AgeDirection, type PlateL
 import { pairPlace, plateModel, type PlateInput, type PlateModel } from './plateModel.ts';
 import { figureNames } from './speciesNames.ts';
 import { treeInk, treeLayout, type TreeInk, type TreePlace } from './treeLayout.ts';
+import { ageBarsPath, treeLinesPath } from './treesInk.ts';
 import { wingInk, type WingInk } from './wingGeometry.ts';
 
 export type SceneRequest = {
@@ -46,6 +47,9 @@ export type PlateScene = {
 	readonly fan: readonly string[];
 	readonly observed: string;
 	readonly nodeMeans: string;
+	/** lines and node ages of the other trees; '' on a plate of one tree */
+	readonly treeLines: string;
+	readonly ageBars: string;
 	readonly ends: EndsScene;
 };
 
@@ -77,6 +81,8 @@ export function plateScene(input: PlateInput, request: SceneRequest): PlateScene
 		diamonds: nodeDiamonds(model, x, axis),
 		bins: overlapBins(axis, model.overlap),
 		...lines(input, { x, spacing, axis }, request.average),
+		treeLines: input.trees ? treeLinesPath(input.trees, { x, spacing, axis }) : '',
+		ageBars: input.trees ? ageBarsPath(input.trees, treePlace, { x, pitch: layout.pitch }) : '',
 		ends: endsScene(input, {
 			panel: layout.ends,
 			axis,
