@@ -51,11 +51,11 @@ function cladeRow(tested: TestedClade, prepared: PreparedAnalysis, rows: Rows): 
 
 type BeyondFields = Pick<CladeRow, 'pBeyondParent' | 'pBeyondParentAdjusted' | 'whyNotBeyond' | 'parent'>;
 
-function beyondRow({ beyond, group }: TestedClade, { tree, ages }: PreparedAnalysis, { names }: Rows): BeyondFields {
+function beyondRow({ beyond, group }: TestedClade, { tree, ages }: PreparedAnalysis, { names, alpha }: Rows): BeyondFields {
 	if (beyond === null) return { pBeyondParent: null, pBeyondParentAdjusted: null, whyNotBeyond: NO_CLADE, parent: null };
 	const { parent, parentTips, pAdjusted, smallestP } = beyond;
 	const isBelowRoot = treeShape({ parent: tree.parent, ages }).internal[0] === parent;
-	const tooFew = whyNotBeyond({ tips: group.members.length, among: parentTips, smallestP });
+	const tooFew = whyNotBeyond({ tips: group.members.length, among: parentTips, smallestP, alpha });
 	const why = isBelowRoot ? BELOW_THE_ROOT : pAdjusted === null ? tooFew : null;
 	return {
 		pBeyondParent: isBelowRoot ? null : beyond.p,

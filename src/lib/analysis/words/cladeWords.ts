@@ -10,8 +10,9 @@ export function whyNotTestable(ways: Ways & { readonly smallestAdjustedP: number
 	return `${floor}, which is ${numberOf(ways.smallestAdjustedP)} ${among}.`;
 }
 
-export function whyNotBeyond(ways: Ways): string {
-	return `${chosenInWays(ways)} of the clade above: p cannot be below ${numberOf(ways.smallestP)}.`;
+export function whyNotBeyond({ alpha, ...ways }: Ways & { readonly alpha: number }): string {
+	const floor = `${chosenInWays(ways)} of the clade above: p cannot be below ${numberOf(ways.smallestP)}`;
+	return ways.smallestP > alpha ? `${floor}.` : `${floor}, too large where so many clades are asked about.`;
 }
 
 export const BELOW_THE_ROOT = 'It stands directly below the root, so p among all species is already p beyond the clade above.';
