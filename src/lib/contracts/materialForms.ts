@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { COVARIATE_SCALES } from './covariates.ts';
 import { AGE_UNITS, TREE_SET_KINDS, type Confirm } from './materials.ts';
 import { measureSchema } from './measureSchema.ts';
 import { TIP_PLACEMENTS, treeAboutSchema, type TreeAbout } from './treeAbout.ts';
@@ -9,9 +10,13 @@ const answer = <Schema extends z.ZodType>(schema: Schema) =>
 
 const wholeNumber = (least: number, message: string) => z.coerce.number(message).int(message).min(least, message);
 
+/** What a text may be kept as. */
+export const MATERIAL_KINDS = ['trees', 'matrix', 'covariate'] as const;
+export type MaterialKind = (typeof MATERIAL_KINDS)[number];
+
 /** What a person answers about a text that is looked at; an answer left open is absent. */
 export const answersForm = z.object({
-	readAs: answer(z.enum(['trees', 'matrix'])),
+	readAs: answer(z.enum(MATERIAL_KINDS)),
 	ageUnit: answer(z.enum(AGE_UNITS)),
 	treeKind: answer(z.enum(TREE_SET_KINDS)),
 	burnIn: answer(wholeNumber(0, 'Give the number of trees to leave out at the start: 0 or more.')),
@@ -20,7 +25,8 @@ export const answersForm = z.object({
 	measure: answer(measureSchema),
 	valueKind: answer(z.enum(['similarity', 'distance'])),
 	scale: answer(z.enum(['fraction', 'percent'])),
-	triangle: answer(z.enum(['average', 'upper', 'lower']))
+	triangle: answer(z.enum(['average', 'upper', 'lower'])),
+	covariateScale: answer(z.enum(COVARIATE_SCALES))
 });
 export type Answers = z.infer<typeof answersForm>;
 
@@ -32,15 +38,15 @@ const label = z
 
 export const keepForm = answersForm.extend({ label });
 
-/** A tree set or an overlap run of the study, as a form names it: `trees:ID`, `matrix:ID`. */
+/** A tree set, an overlap run or a covariate of the study, as a form names it: `trees:ID`, `matrix:ID`, `covariate:ID`. */
 export const materialSchema = z
 	.string()
-	.regex(/^(trees|matrix):[\w-]{1,64}$/, 'That is no material of this study.')
+	.regex(/^(trees|matrix|covariate):[\w-]{1,64}$/, 'That is no material of this study.')
 	.transform((text): MaterialName => ({
-		kind: text.startsWith('trees:') ? 'trees' : 'matrix',
+		kind: MATERIAL_KINDS.find((kind) => text.startsWith(`${kind}:`)) ?? 'matrix',
 		id: text.slice(text.indexOf(':') + 1)
 	}));
-export type MaterialName = { readonly kind: 'trees' | 'matrix'; readonly id: string };
+export type MaterialName = { readonly kind: MaterialKind; readonly id: string };
 
 export const materialForm = z.object({ material: materialSchema });
 export const renameMaterialForm = z.object({ material: materialSchema, label });

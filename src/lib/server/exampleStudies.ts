@@ -9,6 +9,7 @@ import { projectRoot } from './folders.ts';
 import { watchAnalysis } from './jobs/analysisJobs.ts';
 import { can } from './permissions.ts';
 import * as analyses from './repositories/analyses.ts';
+import * as covariates from './repositories/covariates.ts';
 import * as overlapRuns from './repositories/overlapRuns.ts';
 import * as studies from './repositories/studies.ts';
 import * as treeSets from './repositories/treeSets.ts';
@@ -19,6 +20,8 @@ type Example = {
 	readonly question: string;
 	/** files in the order they are kept: what comes last is what a plan proposes */
 	readonly trees: readonly { readonly file: string; readonly label: string; readonly kind: 'summary' | 'posterior' }[];
+	/** what an analysis of its own allows for */
+	readonly covariates: readonly { readonly file: string; readonly label: string }[];
 	/** fixed, so that everybody who opens the example reads the same numbers */
 	readonly seed: number;
 };
@@ -29,6 +32,7 @@ const EXAMPLES: readonly Example[] = [
 		title: 'Moss beetles of the Merrow Range',
 		question: 'Have moss beetles that parted recently kept similar niches?',
 		trees: [{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }],
+		covariates: [],
 		seed: 20262
 	},
 	{
@@ -39,6 +43,7 @@ const EXAMPLES: readonly Example[] = [
 			{ file: 'posterior-trees.nex', label: '200 posterior trees', kind: 'posterior' },
 			{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }
 		],
+		covariates: [{ file: 'distance-km.csv', label: 'distance between ranges, km' }],
 		seed: 20261
 	}
 ];
@@ -47,7 +52,8 @@ const RUNS = [
 	{ file: 'overlap-d.csv', label: 'Schoener’s D, Merrow Range at 2.5′', measure: 'schoener-d' }
 ] as const;
 
-type PlanFields = Pick<PlanRequest, 'treeSet' | 'tree' | 'overlapRun' | 'permutations' | 'seed'>;
+type PlanFields = Pick<PlanRequest, 'treeSet' | 'tree' | 'overlapRun' | 'permutations' | 'seed'> &
+	Partial<Pick<PlanRequest, 'covariates'>>;
 
 /** The run of the main job that a start of the demo prints. */
 export type MainJob = { readonly study: string; readonly analysis: string; readonly result: AnalysisResult };
@@ -80,6 +86,9 @@ async function keepExample(lead: SignedInUser, lab: string, example: Example): P
 	for (const { file, label, measure } of RUNS) {
 		await overlapRuns.create(access, { label, measure, csv: await exampleText(example, file) });
 	}
+	for (const { file, label } of example.covariates) {
+		await covariates.create(access, { label, csv: await exampleText(example, file), scale: 'plain' });
+	}
 	return id;
 }
 
@@ -97,7 +106,11 @@ async function runMainJob(access: Access, study: string, { seed }: Example): Pro
 	const posterior = kept.find(({ kind }) => kind === 'posterior');
 	// Before the main job, which stays the newest of the study.
 	if (posterior !== undefined) await runToItsEnd(access, { ...asked, treeSet: posterior.id, tree: 'all' });
-	const { id, result } = await runToItsEnd(access, { ...asked, treeSet: treeSet.id, tree: 0 });
+	const allowed = (await covariates.list(access)).map((covariate) => covariate.id);
+	const plan = { ...asked, treeSet: treeSet.id, tree: 0 };
+	// Fewer shuffles: they place p well enough, and a start stays quick.
+	if (allowed.length > 0) await runToItsEnd(access, { ...plan, covariates: allowed, permutations: 9999 });
+	const { id, result } = await runToItsEnd(access, plan);
 	return { study, analysis: id, result };
 }
 

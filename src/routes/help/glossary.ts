@@ -81,6 +81,26 @@ export const GLOSSARY: readonly GlossaryGroup[] = [
 					'A plan, the exact inputs it ran on, and its result, which is never changed afterwards. When a material changes, the analysis is marked out of date and you decide whether to run again.'
 			},
 			{
+				word: 'covariate',
+				means:
+					'Another species-by-species matrix, such as the distance between ranges, which may go with both age and overlap. An analysis can tell what age explains after allowing for it; that does not remove spatial structure.'
+			},
+			{
+				word: 'partial correlation',
+				means:
+					'How overlap goes with age once both are freed of what the covariates explain. Its p comes from shuffling what the covariates leave of the overlaps; the whole overlaps are shuffled too, as a check.'
+			},
+			{
+				word: 'double semi-partialing',
+				means:
+					'The test of one coefficient among several: what that predictor has of its own is shuffled among the species, and the regression is made again.'
+			},
+			{
+				word: 'variance inflation',
+				means:
+					'How many times less sure a coefficient is because its predictor goes with the others. From about 10 on they can hardly be told apart.'
+			},
+			{
 				word: 'finding',
 				means: 'The sentence that an analysis licenses. Beside it, how far this goes: what the result does not say.'
 			},

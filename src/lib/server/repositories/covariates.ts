@@ -136,6 +136,24 @@ export function rename(access: Access, id: string, label: string): Promise<boole
 	return changeNoted(access, id, { values: { label }, action: 'covariate.changed' });
 }
 
+/** A second one of the same text and readings, with a label of its own; null when it is not there. */
+export function copy(access: Access, id: string): Promise<Covariate | null> {
+	return transaction(async (tx) => {
+		const [source] = await tx
+			.select()
+			.from(covariates)
+			.where(and(eq(covariates.id, id), isNull(covariates.deletedAt), within(access, covariates.studyId)));
+		if (source === undefined) return null;
+		const { createdAt: _madeThen, ...kept } = source;
+		const row = { ...kept, id: newId(), label: `${source.label} (copy)`, replaces: null, createdBy: personOf(access) };
+		const [copied] = await tx.insert(covariates).values(row).returning();
+		if (copied === undefined) throw new Error('Expected the copy back from the database; got nothing.');
+		await studies.touch(access);
+		await logBook.append(access, { action: 'covariate.added', detail: { covariate: row.id, label: row.label, copyOf: id } });
+		return covariateFromRow(copied);
+	});
+}
+
 export function remove(access: Access, id: string): Promise<boolean> {
 	return changeNoted(access, id, { values: { deletedAt: new Date() }, action: 'covariate.deleted' });
 }

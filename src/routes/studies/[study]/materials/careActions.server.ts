@@ -15,6 +15,7 @@ import { startAnalysis } from '#lib/server/api/startAnalysis.ts';
 import { parseForm } from '#lib/server/parseForm.ts';
 import { can, type Access } from '#lib/server/permissions.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import * as covariates from '#lib/server/repositories/covariates.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { RequestEvent } from './$types';
@@ -22,8 +23,10 @@ import { keepCorrected } from './printedForm.server.ts';
 import { staleAnalyses, type Stale } from './staleAnalyses.ts';
 
 const NOT_FOUND = 'That material is not in this study any more.';
-const repositoryOf = ({ kind }: MaterialName) => (kind === 'trees' ? treeSets : overlapRuns);
-const objectOf = ({ kind, id }: MaterialName) => (kind === 'trees' ? { treeSet: id } : { overlapRun: id });
+const REPOSITORIES = { trees: treeSets, matrix: overlapRuns, covariate: covariates };
+const repositoryOf = ({ kind }: MaterialName) => REPOSITORIES[kind];
+const objectOf = ({ kind, id }: MaterialName) =>
+	kind === 'trees' ? { treeSet: id } : kind === 'matrix' ? { overlapRun: id } : { covariate: id };
 const pageOf = (study: string, query = '') => `/studies/${study}/materials${query}`;
 
 export async function renameMaterial({ params, request, locals }: RequestEvent) {
@@ -82,7 +85,9 @@ export async function settleMaterial({ params, request, locals }: RequestEvent) 
 		const settled =
 			material.kind === 'trees'
 				? await treeSets.confirmSpread(access, material.id)
-				: await settleRun(access, material.id, confirm);
+				: material.kind === 'matrix'
+					? await settleRun(access, material.id, confirm)
+					: await covariates.settle(access, material.id, confirm);
 		if (!settled) error(404, NOT_FOUND);
 	} catch (thrown) {
 		if (!(thrown instanceof InputError)) throw thrown;
@@ -152,7 +157,9 @@ export async function runAgain({ params, request, locals }: RequestEvent) {
 		await treeSets.list(access),
 		await treeSets.listDeleted(access),
 		await overlapRuns.list(access),
-		await overlapRuns.listDeleted(access)
+		await overlapRuns.listDeleted(access),
+		await covariates.list(access),
+		await covariates.listDeleted(access)
 	];
 	const stale = staleAnalyses(await analyses.list(access), materials.flat()).filter(({ through }) => through.includes(id));
 	const refused: string[] = [];

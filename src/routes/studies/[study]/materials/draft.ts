@@ -1,3 +1,4 @@
+import type { MaterialKind } from '#lib/contracts/materialForms.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { ExcerptLine } from './excerpt.ts';
 import type { Question } from './questions.ts';
@@ -11,7 +12,7 @@ export type Draft = {
 	readonly label: string;
 	/** answers as they were given, by field */
 	readonly answers: Readonly<Record<string, string>>;
-	readonly seen: TreesSeen | MatrixSeen | Refused;
+	readonly seen: TreesSeen | MatrixSeen | CovariateSeen | Refused;
 	/** one sentence a field */
 	readonly faults: Readonly<Record<string, string>>;
 };
@@ -35,6 +36,8 @@ export type MatrixSeen = Readable & {
 	readonly wing: WingSeen;
 };
 
+export type CovariateSeen = Readable & { readonly kind: 'covariate' };
+
 /** A wing to draw: every species with its name, or above a limit the averages of neighbours. */
 export type WingSeen =
 	| { readonly species: readonly string[]; readonly lower: readonly number[] }
@@ -42,7 +45,7 @@ export type WingSeen =
 
 export type Refused = {
 	readonly kind: 'refused';
-	readonly readAs: 'trees' | 'matrix' | null;
+	readonly readAs: MaterialKind | null;
 	readonly code: string;
 	readonly message: string;
 	readonly excerpt: readonly ExcerptLine[];

@@ -1,10 +1,11 @@
 import { pageWords } from '#lib/analysis/words/pageWords.ts';
-import { answersForm, keepForm, type Answers } from '#lib/contracts/materialForms.ts';
+import { answersForm, keepForm, type Answers, type MaterialKind } from '#lib/contracts/materialForms.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Place } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
+import * as covariates from '#lib/server/repositories/covariates.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { z } from 'zod';
@@ -12,13 +13,14 @@ import type { Draft, Refused } from './draft.ts';
 import { excerpt } from './excerpt.ts';
 import { keptBeside, type KeptBeside } from './keptBeside.server.ts';
 import { kindOfText } from './kindOfText.ts';
+import { covariateRequest, lookAtCovariate } from './lookAtCovariate.server.ts';
 import { lookAtMatrix, overlapRunRequest } from './lookAtMatrix.server.ts';
 import { lookAtTrees, treeSetRequest } from './lookAtTrees.server.ts';
 import { labelOf } from './proposeLabel.ts';
 import { textOf, type Upload } from './readUpload.server.ts';
 import { withGuesses } from './withGuesses.ts';
 
-type Kind = 'trees' | 'matrix';
+type Kind = MaterialKind;
 
 /** A text as the program understands it; what cannot be read is told in the draft, with the text. */
 export async function lookAt(upload: Upload, beside: KeptBeside): Promise<Draft> {
@@ -33,6 +35,8 @@ export async function lookAt(upload: Upload, beside: KeptBeside): Promise<Draft>
 	return { name: upload.name, text, label, answers: given, seen, faults };
 }
 
+const LOOKS = { trees: lookAtTrees, matrix: lookAtMatrix, covariate: lookAtCovariate };
+
 type Seen = { readonly text: string; readonly kind: Kind | null; readonly seen: Draft['seen'] };
 
 async function seenIn(upload: Upload, answers: Answers, given: Draft['answers']): Promise<Seen> {
@@ -44,7 +48,7 @@ async function seenIn(upload: Upload, answers: Answers, given: Draft['answers'])
 		return {
 			text,
 			kind,
-			seen: kind === 'trees' ? await lookAtTrees(text, answers, given) : await lookAtMatrix(text, answers, given)
+			seen: await LOOKS[kind](text, answers, given)
 		};
 	} catch (thrown) {
 		return { text, kind, seen: refusedBy(thrown, text, kind) };
@@ -56,7 +60,7 @@ function refusedBy(thrown: unknown, text: string, kind: Kind | null): Refused {
 	const where: Place | undefined = thrown instanceof InputError ? thrown.where : undefined;
 	return {
 		...{ kind: 'refused', readAs: kind, code: thrown.code, message: pageWords(thrown.message) },
-		excerpt: excerpt(text, where, kind === 'matrix' ? 'cells' : 'signs'),
+		excerpt: excerpt(text, where, kind === 'trees' || kind === null ? 'signs' : 'cells'),
 		place: where?.line === undefined ? null : { line: where.line, column: kind === 'trees' ? (where.column ?? null) : null }
 	};
 }
@@ -78,7 +82,8 @@ export async function keep(access: Access, upload: Upload, replaces: { kind: Kin
 		return { ok: false, draft: { ...draft, label: upload.fields['label'] ?? '', faults: faultsOf(parsed.error) } };
 	const { kind } = draft.seen;
 	if (kind === 'refused') return { ok: false, draft };
-	if (replaces !== null && replaces.kind !== kind) return { ok: false, draft: { ...draft, faults: { form: otherKind(kind) } } };
+	if (replaces !== null && replaces.kind !== kind)
+		return { ok: false, draft: { ...draft, faults: { form: otherKind(replaces.kind, kind) } } };
 	if (kind === 'matrix' && parsed.data.measure === undefined) {
 		return { ok: false, draft: { ...draft, faults: { measure: 'Choose the measure; the report names it.' } } };
 	}
@@ -88,10 +93,15 @@ export async function keep(access: Access, upload: Upload, replaces: { kind: Kin
 		: { ok: true, kind, id };
 }
 
-function otherKind(kind: Kind): string {
-	return kind === 'trees'
-		? 'A matrix can be replaced by a matrix only; this text holds trees. Keep it beside the matrix instead.'
-		: 'A tree can be replaced by a tree only; this text is a matrix. Keep it beside the tree instead.';
+const KIND_WORDS = {
+	trees: { one: 'tree', is: 'holds trees' },
+	matrix: { one: 'matrix', is: 'is a matrix of overlaps' },
+	covariate: { one: 'covariate', is: 'is a covariate' }
+} as const;
+
+function otherKind(replaced: Kind, kind: Kind): string {
+	const { one } = KIND_WORDS[replaced];
+	return `A ${one} can be replaced by a ${one} only; this text ${KIND_WORDS[kind].is}. Keep it beside the ${one} instead.`;
 }
 
 type Keeping = { readonly kind: Kind; readonly replaces: string | null; readonly text: string };
@@ -104,6 +114,12 @@ async function store(
 	if (kind === 'trees') {
 		const request = treeSetRequest(label, text, answers);
 		const kept = replaces === null ? await treeSets.create(access, request) : await treeSets.replace(access, replaces, request);
+		return kept?.id ?? null;
+	}
+	if (kind === 'covariate') {
+		const request = covariateRequest(label, text, answers);
+		const kept =
+			replaces === null ? await covariates.create(access, request) : await covariates.replace(access, replaces, request);
 		return kept?.id ?? null;
 	}
 	const request = overlapRunRequest(label, text, answers);

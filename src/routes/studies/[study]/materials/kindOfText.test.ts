@@ -16,6 +16,7 @@ describe('kindOfText', () => {
 	it('reads a tree as trees and a table as a matrix', () => {
 		expect(kindOfText('(a:1,b:1);')).toBe('trees');
 		expect(kindOfText('species,a,b\na,1,0.5\nb,0.5,1')).toBe('matrix');
+		expect(kindOfText('species,a,b\na,0,221.1\nb,221.1,0')).toBe('covariate');
 	});
 
 	it('says of words that they are neither a tree nor a table', () => {

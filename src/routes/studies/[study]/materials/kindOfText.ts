@@ -1,11 +1,13 @@
+import type { MaterialKind } from '#lib/contracts/materialForms.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
+import { looksLikeCovariate } from './looksLikeCovariate.ts';
 import { recogniseText } from './recogniseText.ts';
 
 /**
- * Whether a text is read as trees or as a matrix.
+ * Whether a text is read as trees, as a matrix of overlaps or as a covariate.
  * @throws {InputError} `rich-text` on a word processor's file, `no-material` on words without any number
  */
-export function kindOfText(text: string): 'trees' | 'matrix' {
+export function kindOfText(text: string): MaterialKind {
 	const recognised = recogniseText(text);
 	if (recognised === 'rich-text') {
 		throw new InputError(
@@ -19,5 +21,5 @@ export function kindOfText(text: string): 'trees' | 'matrix' {
 			'Expected a tree or a table of numbers; this text is neither. A tree would begin with a bracket or #NEXUS, and a table would hold numbers; there is none here.'
 		);
 	}
-	return recognised;
+	return recognised === 'matrix' && looksLikeCovariate(text) ? 'covariate' : recognised;
 }

@@ -2,10 +2,13 @@ import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { MaterialName } from '#lib/contracts/materialForms.ts';
 import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
+import type { Plan } from '#lib/contracts/plan.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { deletionOf, restorable, type Deletion } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import type { ListedCovariate } from '#lib/server/repositories/covariateRows.ts';
+import * as covariates from '#lib/server/repositories/covariates.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
@@ -14,17 +17,23 @@ import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import { tinyWing } from '../tinyWing.ts';
 import { drawTreeSet } from './drawTree.server.ts';
 import { counted, treeFactWords, treeKindWords } from './materialWords.ts';
-import { matrixSettleQuestions, treeSettleQuestions } from './questions.ts';
+import { covariateFactWords } from './covariateWords.ts';
+import { covariateSettleQuestions, matrixSettleQuestions, treeSettleQuestions } from './questions.ts';
 import { staleAnalyses } from './staleAnalyses.ts';
 import { printedFormRemark } from './printedForm.server.ts';
 
 /** What is kept of a study, what was deleted, and what rests on a material that was replaced. */
 export async function materialsPage(access: Access) {
 	const [trees, runs] = [await treeSets.list(access), await overlapRuns.list(access)];
-	const gone = [...(await treeSets.listDeleted(access)), ...(await overlapRuns.listDeleted(access))];
+	const allowed = await covariates.list(access);
+	const gone = [
+		...(await treeSets.listDeleted(access)),
+		...(await overlapRuns.listDeleted(access)),
+		...(await covariates.listDeleted(access))
+	];
 	const asked = await analyses.list(access);
-	const stale = staleAnalyses(asked, [...trees, ...runs, ...gone]);
-	const usedBy = (id: string) => asked.filter(({ treeSetId, overlapRunId }) => treeSetId === id || overlapRunId === id).length;
+	const stale = staleAnalyses(asked, [...trees, ...runs, ...allowed, ...gone]);
+	const usedBy = (id: string) => asked.filter(({ plan }) => usesMaterial(plan, id)).length;
 	const uses: Uses = {
 		usedBy,
 		staleFor: (id) => stale.filter(({ through }) => through.includes(id)).length,
@@ -35,11 +44,16 @@ export async function materialsPage(access: Access) {
 	return {
 		trees: await Promise.all(trees.map((set) => keptTree(set, uses))),
 		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed, drawable }))),
-		deleted: restorable(access, gone).map((material) => goneLine(material, [...trees, ...runs]))
+		covariates: allowed.map((covariate) => keptCovariate(covariate, uses)),
+		deleted: restorable(access, gone).map((material) => goneLine(material, [...trees, ...runs, ...allowed]))
 	};
 }
 
-export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs'][number];
+export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs' | 'covariates'][number];
+
+function usesMaterial({ treeSet, overlapRun, covariates: allowed }: Plan, id: string): boolean {
+	return treeSet === id || overlapRun === id || allowed.includes(id);
+}
 
 type Uses = {
 	readonly usedBy: (id: string) => number;
@@ -88,6 +102,17 @@ async function keptRun(access: Access, run: ListedRun, { usedBy, staleFor, delet
 	};
 }
 
+function keptCovariate(covariate: ListedCovariate, { usedBy, staleFor, deletion }: Uses) {
+	const { id, label, createdAt, createdBy, species, remarks } = covariate;
+	return {
+		...{ kind: 'covariate' as const, id, label, at: createdAt, remarks: pageRemarks(remarks) },
+		facts: covariateFactWords(species.length, covariate),
+		...{ usedBy: usedBy(id), stale: staleFor(id), deletion: deletion(id, createdBy) },
+		questions: covariateSettleQuestions(remarks, {}),
+		...{ drawing: null, wing: null, about: null, offersCorrection: false }
+	};
+}
+
 function missingWords(lower: Float64Array = new Float64Array()): string {
 	let missing = 0;
 	for (const value of lower) if (Number.isNaN(value)) missing += 1;
@@ -96,8 +121,10 @@ function missingWords(lower: Float64Array = new Float64Array()): string {
 		: `${counted(missing, 'pair', 'pairs')} missing of ${counted(lower.length, 'pair', 'pairs')}`;
 }
 
-function goneLine(material: TreeSet | ListedRun, kept: readonly (TreeSet | ListedRun)[]) {
-	const kind = 'tips' in material ? ('trees' as const) : ('matrix' as const);
+type Listed = TreeSet | ListedRun | ListedCovariate;
+
+function goneLine(material: Listed, kept: readonly Listed[]) {
+	const kind = 'tips' in material ? ('trees' as const) : 'measure' in material ? ('matrix' as const) : ('covariate' as const);
 	const heir = kept.find(({ replaces }) => replaces === material.id);
 	return {
 		kind,
@@ -111,6 +138,6 @@ function goneLine(material: TreeSet | ListedRun, kept: readonly (TreeSet | Liste
 /** The material a new text shall replace, as the address names it. */
 export async function replacing(access: Access, name: MaterialName | null) {
 	if (name === null) return null;
-	const found = name.kind === 'trees' ? await treeSets.find(access, name.id) : await overlapRuns.findListed(access, name.id);
+	const found = await named(access, name);
 	return found === null || found.deletedAt !== null ? null : { ...name, label: found.label };
 }

@@ -1,3 +1,4 @@
+import type { MaterialKind } from '#lib/contracts/materialForms.ts';
 import { MEASURE_NAMES, MEASURES } from '#lib/contracts/measure.ts';
 
 const LONGEST = 200;
@@ -5,7 +6,7 @@ const LONGEST = 200;
 export type LabelGround = {
 	/** '' for a pasted text */
 	readonly fileName: string;
-	readonly kind: 'trees' | 'matrix' | null;
+	readonly kind: MaterialKind | null;
 	readonly measure?: string | undefined;
 	/** the label of what the text shall replace, which goes before all others */
 	readonly former?: string | undefined;
@@ -40,6 +41,7 @@ function bareLabel({ fileName, kind, measure, former }: LabelGround): string {
 		.trim();
 	if (fromFile !== '') return fromFile.slice(0, LONGEST);
 	if (kind === 'trees') return 'Dated tree';
+	if (kind === 'covariate') return 'Distance';
 	const known = MEASURES.find((one) => one === measure && one !== 'other');
 	return known === undefined ? 'Niche overlap' : MEASURE_NAMES[known];
 }

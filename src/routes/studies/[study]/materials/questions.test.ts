@@ -1,6 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { remark } from '#lib/remarks/remark.ts';
-import { matrixQuestions, treeQuestions, type Question } from './questions.ts';
+import { covariateQuestions, matrixQuestions, treeQuestions, type Question } from './questions.ts';
 
 const names = (questions: readonly Question[]) =>
 	questions.flatMap(({ parts }) => parts.flatMap((part) => (typeof part === 'string' ? [] : [part.name])));
@@ -56,5 +56,14 @@ describe('matrixQuestions', () => {
 		const rest = [remark('settle', 'asymmetric', '')];
 		const asked = matrixQuestions(rest, { measure: 'other', valueKind: 'distance', scale: 'percent' });
 		expect(names(asked)).toEqual(['measure', 'triangle', 'valueKind']);
+	});
+});
+
+describe('covariateQuestions', () => {
+	it('asks whether it is one and how it counts, and which half to take only where they differ', () => {
+		expect(names(covariateQuestions([], {}))).toEqual(['readAs', 'covariateScale']);
+		const uneven = covariateQuestions([remark('settle', 'asymmetric', '')], {});
+		expect(names(uneven)).toEqual(['readAs', 'covariateScale', 'triangle']);
+		expect(uneven.map(({ isOpen }) => isOpen)).toEqual([false, false, true]);
 	});
 });

@@ -15,7 +15,7 @@ export type Field =
 	| { readonly type: 'tick'; readonly name: string; readonly label: string; readonly value: string };
 
 /** Answers that a draft carries on when their question is not shown any more. */
-export const SETTLING_FIELDS = ['valueKind', 'scale', 'triangle', 'spread'] as const;
+export const SETTLING_FIELDS = ['readAs', 'valueKind', 'scale', 'triangle', 'spread', 'covariateScale'] as const;
 
 /** One question as a sentence with its answers in it. */
 export type Question = {
@@ -42,6 +42,36 @@ export function matrixQuestions(remarks: readonly Remark[], given: Given): Quest
 	const doubts = matrixSettleQuestions(remarks, given).sort((a, b) => Number(b.isOpen) - Number(a.isOpen));
 	return [measureQuestion(given), ...doubts].slice(0, MOST_QUESTIONS);
 }
+
+/** What is asked about a covariate: whether it is one, on which scale it counts, and where its halves differ. */
+export function covariateQuestions(remarks: readonly Remark[], given: Given): Question[] {
+	const isMatrix = { type: 'choice', name: 'readAs', label: 'What the text is', value: 'covariate', options: READ_AS } as const;
+	const scale = {
+		type: 'choice',
+		name: 'covariateScale',
+		label: 'Scale',
+		value: given['covariateScale'] || 'plain',
+		options: SCALES
+	};
+	return [
+		{ parts: ['It is ', isMatrix, '.'], isOpen: false },
+		{ parts: ['Its values count ', { ...scale, type: 'choice' }, '.'], isOpen: false },
+		...covariateSettleQuestions(remarks, given)
+	];
+}
+
+export function covariateSettleQuestions(remarks: readonly Remark[], given: Given): Question[] {
+	return has(remarks, 'asymmetric', 'zero-filled-half') || given['triangle'] ? [triangleQuestion(given)] : [];
+}
+
+const READ_AS = [
+	{ value: 'covariate', text: 'a covariate, such as distance' },
+	{ value: 'matrix', text: 'a matrix of niche overlap' }
+];
+const SCALES = [
+	{ value: 'plain', text: 'as they are' },
+	{ value: 'log', text: 'by their logarithm, ln(1 + value)' }
+];
 
 /** A question stays as long as its remark does, or its answer. */
 export function treeSettleQuestions(remarks: readonly Remark[], given: Given): Question[] {

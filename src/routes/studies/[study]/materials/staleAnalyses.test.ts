@@ -42,4 +42,14 @@ describe('staleAnalyses', () => {
 		const materials = [material('t1', null, GONE), material('t2', 't1', GONE), material('r1')];
 		expect(staleAnalyses([{ id: 'a', plan: plan('t1', 'r1') }], materials)).toEqual([]);
 	});
+
+	it('follows a covariate that was replaced, and lists nothing where it is gone', () => {
+		const allowing = (covariates: string[]) => ({ ...plan('t1', 'r1'), covariates });
+		const standing = [material('t1'), material('r1'), material('c1', null, GONE), material('c2', 'c1'), material('c3')];
+		expect(staleAnalyses([{ id: 'a', plan: allowing(['c3', 'c1']) }], standing)).toEqual([
+			{ id: 'a', renewed: allowing(['c3', 'c2']), through: ['c2'] }
+		]);
+		const gone = [material('t1'), material('r1'), material('c1', null, GONE)];
+		expect(staleAnalyses([{ id: 'a', plan: allowing(['c1']) }], gone)).toEqual([]);
+	});
 });

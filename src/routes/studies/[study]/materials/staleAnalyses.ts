@@ -22,14 +22,22 @@ export function staleAnalyses(asked: readonly Asked[], materials: readonly Mater
 	const kept = new Set(materials.filter(({ deletedAt }) => deletedAt === null).map(({ id }) => id));
 	const known = new Set(asked.map(({ plan }) => keyOf(plan)));
 	return asked.flatMap(({ id, plan }) => {
-		const renewed = { ...plan, treeSet: lastHeir(heirs, plan.treeSet), overlapRun: lastHeir(heirs, plan.overlapRun) };
-		const isSame = renewed.treeSet === plan.treeSet && renewed.overlapRun === plan.overlapRun;
-		if (isSame || !kept.has(renewed.treeSet) || !kept.has(renewed.overlapRun) || known.has(keyOf(renewed))) return [];
-		const through = [renewed.treeSet, renewed.overlapRun].filter(
-			(material) => material !== plan.treeSet && material !== plan.overlapRun
-		);
+		const renewed = {
+			...plan,
+			treeSet: lastHeir(heirs, plan.treeSet),
+			overlapRun: lastHeir(heirs, plan.overlapRun),
+			covariates: plan.covariates.map((covariate) => lastHeir(heirs, covariate))
+		};
+		const before = materialsOf(plan);
+		const through = materialsOf(renewed).filter((material) => !before.includes(material));
+		const isWhole = materialsOf(renewed).every((material) => kept.has(material));
+		if (through.length === 0 || !isWhole || known.has(keyOf(renewed))) return [];
 		return [{ id, renewed, through }];
 	});
+}
+
+function materialsOf({ treeSet, overlapRun, covariates }: Plan): string[] {
+	return [treeSet, overlapRun, ...covariates];
 }
 
 function lastHeir(heirs: ReadonlyMap<string, string>, id: string): string {
