@@ -6,6 +6,7 @@ import {
 	fallCaution,
 	fallSentence,
 	influenceSentence,
+	noFallSentence,
 	powerSentence
 } from './curveSentences.ts';
 
@@ -59,6 +60,11 @@ describe('fallSentence and fallCaution', () => {
 		expect(fallSentence(alike, scale)).toContain(sentence);
 		const parted = { ...fall, fits: [...alike.fits.slice(0, 2), fit(4, 1, 'follows')] };
 		expect(fallSentence(parted, scale)).toContain('depends on the number of axes assumed.');
+	});
+
+	it('says why a measure has no curve', () => {
+		expect(noFallSentence('pianka')).toContain('These overlaps are Pianka’s overlap, so no curve is drawn.');
+		expect(noFallSentence('warren-i')).toBeNull();
 	});
 
 	it('says that the age is not comparable, and what a floor and a ceiling would do', () => {

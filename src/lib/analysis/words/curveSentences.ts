@@ -1,3 +1,4 @@
+import { type Measure, MEASURE_NAMES } from '#lib/contracts/measure.ts';
 import type { AgeUnit } from '#lib/contracts/materials.ts';
 import type { Statistic } from '#lib/contracts/plan.ts';
 import type { AgeClass, FallBlock, InfluenceBlock, PowerBlock } from '#lib/contracts/resultBlocks.ts';
@@ -46,6 +47,12 @@ export function fallSentence(fall: FallBlock, scale: AgeScale & { readonly young
 		`Had niches walked at random on one axis, the curve fitted to these overlaps passes one half ${passesAt(one.halfOverlapAge, scale)}` +
 		` (5 to 95 %: ${rangeOf(one.range, scale)}); ${rest} axes. ${shape}.`
 	);
+}
+
+/** Why no curve is drawn; null for a measure that has one, whose result is older than the curve. */
+export function noFallSentence(measure: Measure): string | null {
+	if (measure === 'schoener-d' || measure === 'warren-i') return null;
+	return `The fall of overlap under a random walk is known for Schoener’s D and Warren’s I. These overlaps are ${MEASURE_NAMES[measure]}, so no curve is drawn.`;
 }
 
 /** “at 5.2 Ma”, or on which side of the tree it lies beyond what can be known. */

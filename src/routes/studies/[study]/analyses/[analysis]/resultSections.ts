@@ -1,7 +1,9 @@
 import type { Component } from 'svelte';
 import { ALSO_TESTED, CLADES, SISTERS } from './cladeSections.ts';
 import { COVARIATES } from './covariateSections.ts';
+import { CURVES } from './curveSections.ts';
 import { nodeSentence } from './nodeSentence.ts';
+import { SIGNAL } from './signalSections.ts';
 import { TREES } from './treeSection.ts';
 import type { Findings } from './findingsView.ts';
 
@@ -29,11 +31,13 @@ export const RESULT_SECTIONS: readonly ResultSection[] = [
 		sentence: nodeSentence,
 		load: () => import('./sections/NodeAverages.svelte')
 	},
+	...CURVES,
 	TREES,
 	ALSO_TESTED,
 	COVARIATES,
 	CLADES,
-	SISTERS
+	SISTERS,
+	SIGNAL
 ];
 
 /** The parts that a result holds. */
