@@ -29,7 +29,9 @@ export const PLAN_FIELDS = [
 	'clades',
 	'cladeTips',
 	'declared',
-	'covariates'
+	'covariates',
+	'signal',
+	'signalTable'
 ] as const;
 export type PlanField = (typeof PLAN_FIELDS)[number];
 export type PlanValues = Readonly<Record<PlanField, string>>;
@@ -41,7 +43,9 @@ export const UNASKED = {
 	clades: '',
 	cladeTips: '3',
 	declared: '',
-	covariates: ''
+	covariates: '',
+	signal: '',
+	signalTable: ''
 } as const satisfies Partial<PlanValues>;
 
 const wholeNumber = (rule: string, { from, to }: { from: number; to: number }) =>
@@ -118,15 +122,27 @@ export const planForm = z
 			.string()
 			.transform((text) => [...new Set(linesOf(text))])
 			.pipe(z.array(z.string()).max(COVARIATES_LIMIT, COVARIATE_RULE))
-			.default([])
+			.default([]),
+		/** names of niche positions, a line each */
+		signal: z
+			.string()
+			.transform((text) => [...new Set(linesOf(text))])
+			.default([]),
+		signalTable: z.string().default('')
 	})
 	.refine(({ clades, declared }) => clades !== 'declared' || declared.length > 0, {
 		path: ['declared'],
 		message: 'Name at least one clade: a line each, its species parted by commas.'
 	})
-	.transform(({ clades, cladeTips, declared, tree, treeNumber, ...fields }): PlanRequest => {
+	.transform(({ clades, cladeTips, declared, tree, treeNumber, signal, signalTable, ...fields }): PlanRequest => {
 		const asked = { '': null, all: { minTips: cladeTips }, declared: { minTips: cladeTips, declared } }[clades];
-		return planRequestSchema.parse({ ...fields, tree: tree === 'one' ? treeNumber : tree, clades: asked });
+		const table = signalTable === '' ? {} : { table: signalTable };
+		return planRequestSchema.parse({
+			...fields,
+			tree: tree === 'one' ? treeNumber : tree,
+			clades: asked,
+			signal: signal.length === 0 ? null : { variables: signal, ...table }
+		});
 	});
 
 /** A stored plan as the fields of the form. */
@@ -147,6 +163,8 @@ export function planValues(plan: Plan): PlanValues {
 		clades: plan.clades === null ? '' : plan.clades.declared === undefined ? 'all' : 'declared',
 		cladeTips: String(plan.clades?.minTips ?? UNASKED.cladeTips),
 		declared: (plan.clades?.declared ?? []).map((names) => names.join(', ')).join('\n'),
-		covariates: plan.covariates.join('\n')
+		covariates: plan.covariates.join('\n'),
+		signal: (plan.signal?.variables ?? []).join('\n'),
+		signalTable: plan.signal?.table ?? ''
 	};
 }

@@ -21,7 +21,7 @@ describe('alsoSentence', () => {
 });
 
 describe('powerAdvice', () => {
-	const power = { simulations: 1, shuffles: 1, alpha: 0.05, truths: [], rows: [], standardError: 0 };
+	const power = { simulations: 1, shuffles: 1, speciesSimulated: 26, alpha: 0.05, truths: [], rows: [], standardError: 0 };
 
 	it('says nothing where no power was simulated', () => {
 		expect(powerAdvice({ ...microResult(), power: undefined })).toBeNull();

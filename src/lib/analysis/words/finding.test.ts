@@ -148,6 +148,7 @@ describe('findFinding', () => {
 	it('says what the design could have detected when nothing was', () => {
 		const power = {
 			simulations: 200,
+			speciesSimulated: 26,
 			shuffles: 199,
 			alpha: 0.05,
 			truths: [

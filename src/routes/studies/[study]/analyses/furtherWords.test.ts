@@ -38,5 +38,8 @@ describe('furtherFacts', () => {
 			{ term: 'Clades', fact: '1 declared clade' }
 		]);
 		expect(furtherFacts({ ...plan, covariates: ['a', 'b'] })).toEqual([{ term: 'Allowed for', fact: '2 covariates' }]);
+		expect(furtherFacts({ ...plan, signal: { variables: ['warmth', 'rain'] } })).toEqual([
+			{ term: 'Signal in', fact: 'warmth and rain' }
+		]);
 	});
 });

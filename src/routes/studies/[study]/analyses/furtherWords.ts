@@ -22,12 +22,14 @@ export function furtherFacts({
 	alsoTest,
 	statistic,
 	clades,
-	covariates
+	covariates,
+	signal
 }: Plan): { readonly term: string; readonly fact: string }[] {
 	const further: Statistic[] = [...new Set(alsoTest)].filter((value) => value !== statistic);
 	return [
 		...(further.length === 0 ? [] : [{ term: 'Also tested', fact: furtherWords(further, statistic) }]),
 		...(covariates.length === 0 ? [] : [{ term: 'Allowed for', fact: covariateWords(covariates.length) }]),
+		...(signal === null ? [] : [{ term: 'Signal in', fact: signalWords(signal.variables) }]),
 		...(clades === null ? [] : [{ term: 'Clades', fact: cladeFact(clades) }])
 	];
 }
@@ -43,4 +45,10 @@ function cladeFact({ minTips, declared }: NonNullable<Plan['clades']>): string {
 
 function declaredWords(count: number): string {
 	return `${formatCount(count)} declared ${count === 1 ? 'clade' : 'clades'}`;
+}
+
+/** “no niche position”, or the positions by name. */
+export function signalWords(variables: readonly string[]): string {
+	if (variables.length === 0) return 'no niche position';
+	return variables.length <= 2 ? variables.join(' and ') : `${formatCount(variables.length)} niche positions`;
 }

@@ -1,14 +1,18 @@
 import { randomInt } from 'node:crypto';
-import { PLAN_FIELDS, planForm, planValues, type PlanValues } from '#lib/contracts/planForm.ts';
+import { pageRemarks, pageWords } from '#lib/analysis/words/pageWords.ts';
+import { PLAN_FIELDS, planForm, planValues, type PlanValues, UNASKED } from '#lib/contracts/planForm.ts';
 import { planSchema, type PlanRequest } from '#lib/contracts/plan.ts';
 import { InputError } from '#lib/remarks/inputError.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
 import type { Access } from '#lib/server/access.ts';
 import { compute, ComputeRefusedError } from '#lib/server/jobs/pool.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
+import { covariatesOf } from '#lib/server/api/covariatesOf.ts';
+import { nicheTableOf } from '#lib/server/api/nicheTableOf.ts';
 import { computeArgument, decisionsFor } from '#lib/server/repositories/analysisInputs.ts';
 import * as kept from '#lib/server/repositories/covariates.ts';
 import * as names from '#lib/server/repositories/names.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
@@ -41,6 +45,12 @@ export async function planPage(access: Access, query: URLSearchParams) {
 			unit: reading.unit,
 			scale: reading.scale,
 			speciesCount: species.length
+		})),
+		nicheTables: (await nicheTables.list(access)).map(({ id, label, species, variables }) => ({
+			id,
+			label,
+			speciesCount: species.length,
+			variables: variables.map(({ name, role }) => ({ name, role }))
 		}))
 	};
 	const [tree, run] = [trees.find(({ kind }) => kind === 'summary') ?? trees[0], runs[0]];
@@ -55,7 +65,8 @@ export async function planPage(access: Access, query: URLSearchParams) {
 			alternative: 'less',
 			transform: 'none'
 		},
-		...{ alpha: '0.05', permutations: String(proposedShuffles(run.species.length)), seed: String(randomInt(PROPOSED_SEEDS)) }
+		...{ alpha: '0.05', permutations: String(proposedShuffles(run.species.length)), seed: String(randomInt(PROPOSED_SEEDS)) },
+		...UNASKED
 	};
 	const values = chosenValues(base, query);
 	return {
@@ -106,8 +117,11 @@ async function previewOf(access: Access, request: PlanRequest) {
 		const trees = treeSet.treeCount === 1 ? 'one tree, tree 0' : `trees 0 to ${treeSet.treeCount - 1}`;
 		throw new InputError('no-such-tree', `“${treeSet.label}” holds ${trees}; there is no tree ${plan.tree}.`);
 	}
-	const decisions = decisionsFor(run, await names.current(access));
-	const { species, ...preview } = await compute('preview', await computeArgument(plan, { treeSet, run }, decisions));
+	const niches = plan.signal === null ? null : await nicheTableOf(access, plan.signal.table);
+	const covariates = await covariatesOf(access, plan.covariates);
+	const materials = { treeSet, run, niches, covariates };
+	const decisions = decisionsFor(materials, await names.current(access));
+	const { species, ...preview } = await compute('preview', await computeArgument(plan, materials, decisions));
 	return { ...preview, speciesCount: species.length, permutations: plan.permutations, ageUnit: treeSet.ageUnit };
 }
 
@@ -115,7 +129,7 @@ export function refusedBy(thrown: InputError): Refused {
 	const { code, message } = thrown;
 	const remarks = thrown instanceof ComputeRefusedError ? thrown.remarks : [];
 	// The first remark is the sentence itself.
-	return { code, message, remarks: remarks.filter((remark) => remark.message !== message) };
+	return { code, message: pageWords(message), remarks: pageRemarks(remarks.filter((remark) => remark.message !== message)) };
 }
 
 export function faultsOf(issues: readonly { readonly path: readonly PropertyKey[]; readonly message: string }[]) {
