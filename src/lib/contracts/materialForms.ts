@@ -14,12 +14,21 @@ const wholeNumber = (least: number, message: string) => z.coerce.number(message)
 export const MATERIAL_KINDS = ['trees', 'matrix', 'covariate'] as const;
 export type MaterialKind = (typeof MATERIAL_KINDS)[number];
 
+const BURN_IN_RULE = 'Give the trees to leave out at the start: a number from 0, or a share such as 10 %.';
+
+/** A number of trees, or a share below 1 where a per cent sign says so. */
+const burnInText = z.coerce
+	.string()
+	.trim()
+	.regex(/^(?:\d+|\d{1,2}(?:\.\d+)?\s*%)$/, BURN_IN_RULE)
+	.transform((text) => (text.endsWith('%') ? Number.parseFloat(text) / 100 : Number(text)));
+
 /** What a person answers about a text that is looked at; an answer left open is absent. */
 export const answersForm = z.object({
 	readAs: answer(z.enum(MATERIAL_KINDS)),
 	ageUnit: answer(z.enum(AGE_UNITS)),
 	treeKind: answer(z.enum(TREE_SET_KINDS)),
-	burnIn: answer(wholeNumber(0, 'Give the number of trees to leave out at the start: 0 or more.')),
+	burnIn: answer(burnInText),
 	thin: answer(wholeNumber(1, 'Give which trees to keep: 1 for every tree, 10 for every tenth.')),
 	spread: answer(z.literal('yes')),
 	measure: answer(measureSchema),

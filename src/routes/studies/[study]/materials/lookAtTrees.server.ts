@@ -19,7 +19,8 @@ type Given = Readonly<Record<string, string>>;
 export async function lookAtTrees(text: string, answers: Answers, given: Given): Promise<TreesSeen> {
 	refuseLargeText(text, TREE_TEXT_LIMIT_BYTES, 'a tree text');
 	const { kind, treeCount, summary, remarks } = await readTreeSet(treeTextOf(text, answers));
-	const { burnIn = 0, thin = 1 } = answers;
+	// A share of the trees is a number by now.
+	const { burnIn = 0, thin = 1 } = summary;
 	const isDated = summary.rootAge !== null;
 	// A set thinned to one tree still holds several, and the choice can be taken back.
 	const isSeveral = treeCount > 1 || burnIn > 0 || thin > 1;

@@ -14,6 +14,15 @@ describe('treeQuestions', () => {
 		expect(names(treeQuestions(true, [], {}))).toEqual(['ageUnit', 'treeKind', 'burnIn', 'thin']);
 	});
 
+	it('holds the burn-in open while the trees say that a sampler wrote them from its start', () => {
+		const [, asked] = treeQuestions(true, [remark('look', 'burn-in', '')], {});
+		const [, told] = treeQuestions(true, [], { burnIn: '10 %' });
+		const valueOf = (question?: Question) =>
+			question?.parts.flatMap((part) => (typeof part !== 'string' && part.name === 'burnIn' ? [part.value] : []));
+		expect([asked?.isOpen, valueOf(asked)]).toEqual([true, ['']]);
+		expect([told?.isOpen, valueOf(told)]).toEqual([false, ['10 %']]);
+	});
+
 	it('asks about a spread, and goes on showing the answer once the remark is gone', () => {
 		const open = treeQuestions(false, [remark('settle', 'spread-needs-decision', '')], {});
 		const answered = treeQuestions(false, [], { spread: 'yes' });

@@ -12,6 +12,7 @@ export type Field =
 			readonly options: readonly Option[];
 	  }
 	| { readonly type: 'number'; readonly name: string; readonly label: string; readonly value: string; readonly least: number }
+	| { readonly type: 'text'; readonly name: string; readonly label: string; readonly value: string }
 	| { readonly type: 'tick'; readonly name: string; readonly label: string; readonly value: string };
 
 /** Answers that a draft carries on when their question is not shown any more. */
@@ -33,7 +34,7 @@ const UNANSWERED = { value: '', text: 'choose …' };
 /** What is asked about a text of one or several trees: unit of age, what several trees are, whether tips may be levelled. */
 export function treeQuestions(isSeveral: boolean, remarks: readonly Remark[], given: Given): Question[] {
 	const questions = [ageUnitQuestion(given)];
-	if (isSeveral) questions.push(treeKindQuestion(given));
+	if (isSeveral) questions.push(treeKindQuestion(given, has(remarks, 'burn-in')));
 	return [...questions, ...treeSettleQuestions(remarks, given)];
 }
 
@@ -106,7 +107,7 @@ function ageUnitQuestion(given: Given): Question {
 	return { parts: ['Its ages are in ', field, '.'], isOpen: false };
 }
 
-function treeKindQuestion(given: Given): Question {
+function treeKindQuestion(given: Given, asksBurnIn: boolean): Question {
 	const options = [
 		{ value: 'posterior', text: 'a posterior sample of one tree' },
 		{ value: 'summary', text: 'summary trees, each for itself' }
@@ -118,12 +119,12 @@ function treeKindQuestion(given: Given): Question {
 		value: given['treeKind'] || 'posterior',
 		options
 	} as const;
+	// Left empty until somebody answers, where the names of the trees say that a sampler's first steps are among them.
 	const burnIn = {
-		type: 'number',
+		type: 'text',
 		name: 'burnIn',
-		label: 'Trees to leave out at the start',
-		value: given['burnIn'] || '0',
-		least: 0
+		label: 'Trees to leave out at the start, a number or a share such as 10 %',
+		value: given['burnIn'] || (asksBurnIn ? '' : '0')
 	} as const;
 	const thin = {
 		type: 'number',
@@ -132,7 +133,7 @@ function treeKindQuestion(given: Given): Question {
 		value: given['thin'] || '1',
 		least: 1
 	} as const;
-	return { parts: ['They are ', kind, '; leave out the first ', burnIn, ' and keep one in ', thin, '.'], isOpen: false };
+	return { parts: ['They are ', kind, '; leave out the first ', burnIn, ' and keep one in ', thin, '.'], isOpen: asksBurnIn };
 }
 
 function measureQuestion(given: Given): Question {
