@@ -4,10 +4,11 @@ import { fourFigures } from './fourFigures.ts';
 
 const values = (told: typeof exampleTold) => fourFigures(told).map(({ value }) => value);
 
-// The expected texts are written by hand from the numbers of the example, in the form of the design’s sketch.
+// The expected texts are written by hand from the numbers of the example, in the words of the page.
 describe('fourFigures', () => {
 	it('shows slope, p, p within the deepest split, species and the share at the root', () => {
-		expect(values(exampleTold)).toEqual(['−0.0163', '= 0.0016', '= 0.032', '26, 27 %']);
+		expect(values(exampleTold)).toEqual(['−0.0163', '= 0.0016', '= 0.032', '26']);
+		expect(fourFigures(exampleTold)[3].note).toBe('27 % of their pairs meet at the root');
 	});
 
 	it('puts the other tail and the error beside p', () => {
@@ -27,6 +28,7 @@ describe('fourFigures', () => {
 
 	it('says when the deepest split could not be tested', () => {
 		const permutation = { ...exampleTold.permutation, withinDeepestSplit: null };
-		expect(values({ ...exampleTold, permutation }).slice(2)).toEqual(['not tested', '26, –']);
+		expect(values({ ...exampleTold, permutation }).slice(2)).toEqual(['not tested', '26']);
+		expect(fourFigures({ ...exampleTold, permutation })[3].note).toBe('25 different ages');
 	});
 });

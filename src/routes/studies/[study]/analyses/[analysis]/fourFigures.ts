@@ -17,7 +17,7 @@ const TAIL: Readonly<Record<Alternative, { label: string; other: (tails: Tails) 
 	}
 };
 
-/** The four figures under the sentence: slope, p, p within the deepest split, species and the share of pairs at the root. */
+/** The four figures under the sentence: slope, p, p within the deepest split, species, with the share of pairs at the root. */
 export function fourFigures({ compared, species, regression, permutation }: Told): readonly [Figure, Figure, Figure, Figure] {
 	const { alternative, ageUnit, transform } = compared;
 	return [
@@ -28,12 +28,13 @@ export function fourFigures({ compared, species, regression, permutation }: Told
 		},
 		{ label: TAIL[alternative].label, value: pOf(permutation, alternative), note: pNote(permutation, alternative) },
 		withinFigure(permutation.withinDeepestSplit, alternative),
-		{
-			label: 'Species, pairs at the root',
-			value: `${formatCount(species)}, ${permutation.withinDeepestSplit === null ? '–' : formatShare(permutation.withinDeepestSplit.rootPairShare)}`,
-			note: `${formatCount(permutation.distinctAges)} different ages`
-		}
+		{ label: 'Species', value: formatCount(species), note: rootNote(permutation) }
 	];
+}
+
+function rootNote({ withinDeepestSplit, distinctAges }: AnalysisResult['permutation']): string {
+	if (withinDeepestSplit === null) return `${formatCount(distinctAges)} different ages`;
+	return `${formatShare(withinDeepestSplit.rootPairShare)} of their pairs meet at the root`;
 }
 
 type Tested = Tails & { readonly exact: boolean; readonly count: number };
