@@ -27,6 +27,8 @@ describe('planForm', () => {
 		expect(treeOf({ tree: 'one', treeNumber: '7' })).toBe(7);
 		expect(treeOf({ tree: 'one' })).toBe(0);
 		expect(treeOf({ tree: '12', treeNumber: '7' })).toBe(12);
+		// Of a set of one tree the page asks nothing, so nothing is sent.
+		expect(treeOf({ tree: undefined })).toBe('all');
 		expect(planForm.safeParse({ ...values, tree: 'some' }).error?.issues[0]?.message).toContain('counted from 0');
 	});
 

@@ -99,8 +99,8 @@ const COVARIATE_RULE = `A plan allows for at most ${COVARIATES_LIMIT} covariates
 export const planForm = z
 	.object({
 		treeSet: z.string('Choose a tree.').min(1, 'Choose a tree.'),
-		/** all trees of the set, the one that `treeNumber` names, or a number itself, as an address may have it */
-		tree: z.union([z.enum(['all', 'one']), treeIndex], TREE_RULE),
+		/** all trees of the set, the one that `treeNumber` names, or a number itself, as an address may have it; a set of one asks nothing */
+		tree: z.union([z.enum(['all', 'one']), treeIndex], TREE_RULE).default('all'),
 		treeNumber: treeIndex.default(0),
 		overlapRun: z.string('Choose a matrix.').min(1, 'Choose a matrix.'),
 		species: speciesText,
