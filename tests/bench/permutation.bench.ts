@@ -7,7 +7,7 @@ import { runChunks } from '#lib/statistics/runChunks.ts';
 
 /*
  * Read the ratio of a group, not its times: both sides draw the same shuffles in the same process. The plain loop counts
- * two statistics, the blocks five, and the blocks read no age and no weight per pair where one per node will do.
+ * two statistics, the kernel all of them, slope and intercept of node averages and ranks included.
  */
 const SHUFFLES = 1024;
 
@@ -20,10 +20,10 @@ for (const n of [20, 50, 100, 200]) {
 	const run = { seed: 1, firstChunk: 0, chunkCount: SHUFFLES / 256, shuffles: SHUFFLES };
 
 	describe(`${SHUFFLES} shuffles of ${n} species`, () => {
-		bench('blocks, five statistics', () => {
+		bench('kernel, all statistics', () => {
 			runChunks(design, { ...run, within: false });
 		});
-		bench('blocks, five statistics, within the deepest split', () => {
+		bench('kernel, all statistics, within the deepest split', () => {
 			runChunks(design, { ...run, within: true });
 		});
 		bench('plain double loop, two statistics', () => {

@@ -1,35 +1,12 @@
 import { describe, expect, it } from 'vitest';
 import type { ComputeProgress } from '#lib/contracts/compute.ts';
-import { drawnOverlap, drawnTree } from '#lib/statistics/exampleTrees.ts';
-import { lowerTriangle } from '#lib/statistics/pairValues.ts';
-import { randomStream } from '#lib/statistics/randomStream.ts';
 import { analyse } from './analyse.ts';
 import { analyseShare } from './analyseShare.ts';
+import { drawnInputs } from './drawnInputs.fixture.ts';
 import { MICRO_INPUTS, microPlan } from './microResult.fixture.ts';
 import { joinShares, shareOut } from './shareOut.ts';
 
-const N = 14;
-const species = Array.from({ length: N }, (_, i) => `s${String(i)}`);
-
-/** A drawn tree as text, its tips named in order. */
-function drawnText(): string {
-	const { parent, ages } = drawnTree(N, randomStream(2, 0, 8), { polytomies: true });
-	let tip = 0;
-	const textOf = (node: number): string => {
-		const below = [...parent.keys()].filter((child) => parent[child] === node);
-		const name = below.length === 0 ? (species[tip++] ?? '') : `(${below.map(textOf).join(',')})`;
-		const above = parent[node] ?? -1;
-		return above < 0 ? `${name};` : `${name}:${String((ages[above] ?? 0) - (ages[node] ?? 0))}`;
-	};
-	return textOf(0);
-}
-
-const inputs = {
-	...MICRO_INPUTS,
-	treeText: drawnText(),
-	spreadConfirmed: true,
-	overlap: { species, lower: lowerTriangle(drawnOverlap(N, randomStream(3, 0, 8)), N), remarks: [] }
-};
+const inputs = drawnInputs(14);
 
 describe('shareOut', () => {
 	it('deals every chunk once, in runs that differ by one at most', () => {

@@ -58,10 +58,11 @@ export type SharedTallies = { readonly free: Tally | null; readonly within: Tall
  * species; else Monte Carlo. Equal design, seed and number give equal bits.
  */
 export function permutationTest(design: PermutationDesign, options: PermutationOptions): PermutationOutcome {
-	const report = { done: 0, total: plannedTotal(design, options.permutations) };
+	const { shares = [], permutations } = options;
+	const report = { done: arrangementsOf(shares), total: plannedTotal(design, permutations) };
 	const free = askQuestion(design, false, { ...options, report });
 	const within = design.within.length === 0 ? null : askQuestion(design, true, { ...options, report });
-	return outcomeOf(design, options.permutations, { free, within });
+	return outcomeOf(design, permutations, { free, within });
 }
 
 /**
@@ -123,11 +124,13 @@ function askQuestion(design: PermutationDesign, within: boolean, asking: Asking)
 	const tallies: Tally[] = [];
 	let counts: Tally['counts'] = {};
 	let done = 0;
-	for (const tally of sharedTallies(within, asking) ?? talliesOf(design, within, asking)) {
+	const shared = sharedTallies(within, asking);
+	for (const tally of shared ?? talliesOf(design, within, asking)) {
 		tallies.push(tally);
 		counts = addCounts([{ counts }, tally]);
 		done += tally.arrangements;
-		report.done += tally.arrangements;
+		// What the shares have done was reported while they did it, and stands in the sum from the start.
+		if (shared === null) report.done += tally.arrangements;
 		onProgress?.({
 			question: within ? 'within' : 'free',
 			done: report.done,
@@ -137,6 +140,10 @@ function askQuestion(design: PermutationDesign, within: boolean, asking: Asking)
 		});
 	}
 	return mergeTallies(tallies);
+}
+
+function arrangementsOf(shares: readonly SharedTallies[]): number {
+	return shares.reduce((sum, { free, within }) => sum + (free?.arrangements ?? 0) + (within?.arrangements ?? 0), 0);
 }
 
 /** The question's tallies of the shares as one; null where it was not shared. */
