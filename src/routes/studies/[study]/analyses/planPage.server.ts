@@ -128,8 +128,9 @@ async function previewOf(access: Access, request: PlanRequest) {
 export function refusedBy(thrown: InputError): Refused {
 	const { code, message } = thrown;
 	const remarks = thrown instanceof ComputeRefusedError ? thrown.remarks : [];
-	// The first remark is the sentence itself.
-	return { code, message: pageWords(message), remarks: pageRemarks(remarks.filter((remark) => remark.message !== message)) };
+	// The first remark is the sentence itself; the one on missing pairs lists the names that stand in it.
+	const others = remarks.filter((remark) => remark.message !== message && remark.code !== 'missing-pairs');
+	return { code, message: pageWords(message), remarks: pageRemarks(others) };
 }
 
 export function faultsOf(issues: readonly { readonly path: readonly PropertyKey[]; readonly message: string }[]) {

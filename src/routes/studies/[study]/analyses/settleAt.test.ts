@@ -11,6 +11,11 @@ describe('settleAt', () => {
 		expect(settleAt('spread-needs-decision', 's1')?.href).toBe('/studies/s1/materials');
 	});
 
+	it('leads to the run whose pairs are missing, which proposes what to leave out', () => {
+		expect(settleAt('missing-pairs', 's1', 'r1')?.href).toBe('/studies/s1/overlaps/r1');
+		expect(settleAt('missing-pairs', 's1')).toBeNull();
+	});
+
 	it('leads nowhere else when the plan itself settles it', () => {
 		expect(settleAt('choose-a-tree', 's1')).toBeNull();
 	});
