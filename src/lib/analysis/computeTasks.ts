@@ -4,6 +4,7 @@ import { readNicheTable } from '#lib/overlap/readNicheTable.ts';
 import { analyse } from './analyse.ts';
 import { analyseShare } from './analyseShare.ts';
 import { readCovariateMaterial } from './covariates/readCovariateMaterial.ts';
+import { planPower } from './planPower.ts';
 import { previewAnalysis } from './previewAnalysis.ts';
 import { pairAges, readTreeFacts, treeStructure } from './readTreeFacts.ts';
 
@@ -25,6 +26,7 @@ export const computeTasks: Handlers = {
 	mrcaAges: ({ text, tree, spreadConfirmed, species }) =>
 		pairAges(text, tree, { spreadConfirmed, ...(species ? { species } : {}) }),
 	preview: ({ inputs, plan }) => previewAnalysis(inputs, plan),
+	planPower: ({ inputs, plan }) => planPower(inputs, plan),
 	analyseShare: ({ inputs, plan, share }, report) => analyseShare({ inputs, plan, share }, report),
 	analyse: ({ inputs, plan, shares }, report) => analyse(inputs, plan, report, shares)
 };

@@ -22,14 +22,15 @@ type Asked = Pick<Plan, 'alpha' | 'alternative' | 'seed'>;
  */
 export function powerOf(
 	{ tree, ages, species }: Pick<PreparedAnalysis, 'tree' | 'ages' | 'species'>,
-	plan: Asked
+	plan: Asked,
+	{ simulations: most = SIMULATIONS } = {}
 ): PowerBlock | null {
 	const alpha = plan.alternative === 'two-sided' ? plan.alpha / 2 : plan.alpha;
 	const shuffles = Math.max(SHUFFLES, Math.ceil(1 / alpha) - 1);
 	if (shuffles > MOST_SHUFFLES) return null;
 	const pairs = (species.length * (species.length - 1)) / 2;
 	const affordable = Math.floor(VISITS / (pairs * shuffles * POWER_TRUTHS.length));
-	const simulations = Math.max(FEWEST_SIMULATIONS, Math.min(SIMULATIONS, affordable));
+	const simulations = Math.max(FEWEST_SIMULATIONS, Math.min(most, affordable));
 	const options = { truths: POWER_TRUTHS, alpha, simulations, shuffles, seed: plan.seed };
 	const { rows, standardError } = statisticPower({ parent: tree.parent, ages }, options);
 	return {

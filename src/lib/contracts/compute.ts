@@ -7,6 +7,7 @@ import type { SharedTallies } from '#lib/statistics/permutationTest.ts';
 import type { ChunkShare } from '#lib/statistics/shuffleBatches.ts';
 import type { AnalysisProgress, AnalysisResult } from './analysisResult.ts';
 import type { Plan } from './plan.ts';
+import type { PowerBlock } from './resultBlocks.ts';
 import type { AgeUnit, Confirm, OverlapRunRequest } from './materials.ts';
 import type { TreeAbout } from './treeAbout.ts';
 import type { Measure } from './measure.ts';
@@ -114,6 +115,8 @@ export type ComputeTasks = {
 		answer: { species: readonly string[]; values: Float64Array };
 	};
 	preview: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: AnalysisPreview };
+	/** what the plan could detect on its tree; null at a level that simulations cannot reach */
+	planPower: { argument: { inputs: AnalysisInputs; plan: Plan }; answer: PowerBlock | null };
 	/** some chunks of the shuffles of an analysis that several threads share */
 	analyseShare: { argument: { inputs: AnalysisInputs; plan: Plan; share: ChunkShare }; answer: SharedTallies };
 	/** with the shares of its shuffles where others have run them */

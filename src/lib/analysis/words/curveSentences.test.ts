@@ -7,6 +7,7 @@ import {
 	fallSentence,
 	influenceSentence,
 	noFallSentence,
+	planPowerSentence,
 	powerSentence
 } from './curveSentences.ts';
 
@@ -118,6 +119,11 @@ describe('powerSentence', () => {
 				'falling in 62 to 74 % of cases with one niche axis and 92 % with two. Over all of them the slope of node means, every pair ' +
 				'equal does best: 90 % of cases with one niche axis and 100 % with two.'
 		);
+		expect(planPowerSentence(power, 'slope')).toBe(
+			'Had niches walked at random along this tree, the slope over all pairs would find overlap falling in 62 to 74 % of cases with one ' +
+				'niche axis and 92 % with two; the slope of node means, every pair equal would do best, in 90 % of cases with one niche axis and 100 % with two.'
+		);
+		expect(planPowerSentence(power, 'nodes-plain')).toContain(': the most of all statistics here.');
 		expect(powerSentence(power, 'nodes-plain')).toContain('No other statistic does better over all of them.');
 	});
 });

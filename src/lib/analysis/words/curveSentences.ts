@@ -108,6 +108,13 @@ export function powerSentence(power: PowerBlock, statistic: Statistic): string {
 	);
 }
 
+/** The same before a plan runs, with the recommendation while it can still be followed. */
+export function planPowerSentence(power: PowerBlock, statistic: Statistic): string {
+	const opening = `Had niches walked at random along this tree, the ${STATISTIC_WORDS[statistic].name} would find overlap falling in ${sharesOf(power, statistic)}`;
+	if (power.recommended === statistic) return `${opening}: the most of all statistics here.`;
+	return `${opening}; the ${STATISTIC_WORDS[power.recommended].name} would do best, in ${sharesOf(power, power.recommended)}.`;
+}
+
 /** “62 to 74 % of cases with one niche axis and 92 to 97 % with two”. */
 export function sharesOf({ truths, rows }: Pick<PowerBlock, 'truths' | 'rows'>, statistic: Statistic): string {
 	const power = rows.find((row) => row.statistic === statistic)?.power ?? [];
