@@ -48,6 +48,9 @@ describe('the words of a test over all trees', () => {
 		expect(writeCaption(result)).toContain(
 			'The test averages over 2 trees; drawn are tree 1 of the set, its line and its shuffles.'
 		);
+		expect(writeCaption(result)).toContain(
+			'Bars in b, the middle 95 % of the ages of a clade over the trees; fine coloured lines in d'
+		);
 		expect(writeCaption(analysed(0, FALLS, FALLS))).not.toContain('averages');
 	});
 });
