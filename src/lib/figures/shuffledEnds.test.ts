@@ -1,5 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { overlapAxis } from './overlapAxis.ts';
+import { pouredBars } from './endsScene.ts';
+import { plateScene } from './plateScene.ts';
 import { endAtRoot, endBars, endsScale, filledEdges } from './shuffledEnds.ts';
 import { microPlate } from './microPlate.fixture.ts';
 
@@ -47,5 +49,23 @@ describe('filledEdges', () => {
 	it('spans the bins that hold something', () => {
 		expect(filledEdges({ edges: [0, 1, 2, 3], counts: [0, 3, 0] })).toEqual([1, 2]);
 		expect(filledEdges({ edges: [], counts: [] })).toEqual([]);
+	});
+});
+
+describe('pouredBars', () => {
+	const input = { ...microPlate(), permutation: { count: 24, exact: false } };
+	const { ends } = plateScene(input, {
+		...{ width: 900, direction: 'present-left', maxHeight: Infinity, smallestName: 7, abbreviateGenus: true, average: 'nested' }
+	});
+
+	// By hand: after a sixteenth of the shuffles the fullest bar is half as long as in the end; the bin that holds none has no bar.
+	it('stands lower while few have come in', () => {
+		const bars = pouredBars(input, ends, { share: 1 / 16, counts: [0, 1, 2, 1] });
+		expect(bars).toHaveLength(3);
+		expect(Math.max(...bars.map(({ length }) => length))).toBeCloseTo(ends.longest / 2, 9);
+	});
+
+	it('ends as the stored histogram is drawn', () => {
+		expect(pouredBars(input, ends, { share: 1, counts: input.plate.slopeHistogram.counts })).toEqual(ends.bars);
 	});
 });
