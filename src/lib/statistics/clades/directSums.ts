@@ -17,28 +17,32 @@ export function directWithinSums(groups: readonly SpeciesGroup[], count: number,
 	const total = rows.reduce((sum, value) => sum + value, 0) / 2;
 	const sides = groups.map(({ members }) => smallerSide(members, count));
 	const keys = sides.map(({ positions }) => positions.join());
+	const summed = [...new Set(keys)].map((key) => sides[keys.indexOf(key)]?.positions ?? new Int32Array(0));
+	const summedOf = Int32Array.from(keys, (key) => [...new Set(keys)].indexOf(key));
 	const species = new Int32Array(count);
+	const pairsIn = new Float64Array(summed.length);
+	const rowsOf = new Float64Array(summed.length);
 	return (batch) => {
 		const within = new Float64Array(batch.count * groups.length);
-		const sums = new Map<string, { pairs: number; rows: number }>();
 		for (let drawn = 0; drawn < batch.count; drawn++) {
-			sums.clear();
-			for (const [g, { positions, isRest }] of sides.entries()) {
-				const key = keys[g] ?? '';
-				const known = sums.get(key) ?? sumsOf(positions, drawn * count);
-				sums.set(key, known);
-				within[drawn * groups.length + g] = isRest ? total - known.rows + known.pairs : known.pairs;
+			for (const [which, positions] of summed.entries()) sumInPlace(which, positions, drawn * count);
+			for (let g = 0; g < groups.length; g++) {
+				const which = summedOf[g] ?? 0;
+				const rest = sides[g]?.isRest === true ? total - (rowsOf[which] ?? 0) : 0;
+				within[drawn * groups.length + g] = rest + (pairsIn[which] ?? 0);
 			}
 		}
 		return within;
 
-		function sumsOf(positions: Int32Array, start: number): { pairs: number; rows: number } {
+		function sumInPlace(which: number, positions: Int32Array, start: number): void {
 			let ofRows = 0;
 			for (let i = 0; i < positions.length; i++) {
-				species[i] = batch.arrangements[start + (positions[i] ?? 0)] ?? 0;
-				ofRows += rows[species[i] ?? 0] ?? 0;
+				const chosen = batch.arrangements[start + (positions[i] ?? 0)] ?? 0;
+				species[i] = chosen;
+				ofRows += rows[chosen] ?? 0;
 			}
-			return { pairs: pairSum(matrix, count, species.subarray(0, positions.length)), rows: ofRows };
+			rowsOf[which] = ofRows;
+			pairsIn[which] = pairSum(matrix, count, { species, size: positions.length });
 		}
 	};
 }
@@ -51,10 +55,10 @@ function smallerSide(members: Int32Array, count: number): Side {
 	return { positions: Int32Array.from({ length: count - members.length }, (_, i) => restFrom + i), isRest: true };
 }
 
-/** Four partial sums, so that an addition need not wait for the one before. */
-function pairSum(matrix: Float64Array, count: number, species: Int32Array): number {
+/** Over the first `size` species. Four partial sums, so that an addition need not wait for the one before. */
+function pairSum(matrix: Float64Array, count: number, { species, size }: { species: Int32Array; size: number }): number {
 	let [first, second, third, fourth] = [0, 0, 0, 0];
-	for (let i = 1; i < species.length; i++) {
+	for (let i = 1; i < size; i++) {
 		const start = (species[i] ?? 0) * count;
 		let j = 0;
 		for (; j + 3 < i; j += 4) {

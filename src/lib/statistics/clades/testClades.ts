@@ -114,6 +114,8 @@ function leastP({ exact, count }: Pick<ContrastNulls, 'exact' | 'count'>): numbe
 
 /** The adjusted p of a group that had the smallest p it can have. */
 function reachable(minima: Float64Array, smallestP: number): number {
-	const asSmall = minima.filter((minimum) => minimum <= smallestP * (1 + Number.EPSILON * 8)).length;
+	const bound = smallestP * (1 + Number.EPSILON * 8);
+	let asSmall = 0;
+	while (asSmall < minima.length && (minima[asSmall] ?? 0) <= bound) asSmall++;
 	return Math.max(smallestP, asSmall / minima.length);
 }

@@ -81,13 +81,17 @@ function extremeCount({ observed, values, tie }: SharedNull, { tail, exact }: Fa
 
 /** The same count for every arrangement: the observed one first when it is not among the values. */
 function memberCounts({ observed, values, tie }: SharedNull, { tail, exact }: Family): Float64Array {
-	const all = exact ? values : joined(observed, values);
-	const sorted = Float64Array.from(all).sort();
-	return all.map((value) => {
-		const greater = sorted.length - firstAbove(sorted, value - tie, false);
-		const less = firstAbove(sorted, value + tie, true);
-		return countIn({ less, greater }, tail, sorted.length);
-	});
+	const counts = exact ? values.slice() : joined(observed, values);
+	const members = counts.length;
+	const sorted = counts.slice().sort();
+	for (let i = 0; i < members; i++) {
+		const value = counts[i] ?? 0;
+		// Each search is most of the cost, and one tail is all that is asked for as a rule.
+		const greater = tail === 'less' ? 0 : members - firstFrom(sorted, value - tie);
+		const less = tail === 'greater' ? 0 : firstAbove(sorted, value + tie);
+		counts[i] = countIn({ less, greater }, tail, members);
+	}
+	return counts;
 }
 
 function joined(first: number, then: Float64Array): Float64Array {
@@ -101,21 +105,32 @@ function countIn({ less, greater }: { less: number; greater: number }, tail: Tai
 	return tail === 'greater' ? greater : Math.min(members, 2 * Math.min(less, greater));
 }
 
-/** Index of the first entry above `bound`, or, when not `strictly`, of the first at or above it. */
-function firstAbove(sorted: Float64Array, bound: number, strictly: boolean): number {
+/** Index of the first entry above `bound`. */
+function firstAbove(sorted: Float64Array, bound: number): number {
 	let low = 0;
 	let high = sorted.length;
 	while (low < high) {
 		const middle = (low + high) >>> 1;
-		const value = sorted[middle] ?? 0;
-		if (strictly ? value <= bound : value < bound) low = middle + 1;
+		if ((sorted[middle] ?? 0) <= bound) low = middle + 1;
+		else high = middle;
+	}
+	return low;
+}
+
+/** Index of the first entry at or above `bound`. */
+function firstFrom(sorted: Float64Array, bound: number): number {
+	let low = 0;
+	let high = sorted.length;
+	while (low < high) {
+		const middle = (low + high) >>> 1;
+		if ((sorted[middle] ?? 0) < bound) low = middle + 1;
 		else high = middle;
 	}
 	return low;
 }
 
 function lowerInPlace(smallest: Float64Array, counts: Float64Array): void {
-	for (const [i, count] of counts.entries()) if (count < (smallest[i] ?? 0)) smallest[i] = count;
+	for (let i = 0; i < smallest.length; i++) smallest[i] = Math.min(smallest[i] ?? 0, counts[i] ?? 0);
 }
 
 /** Never below p itself: doubled tails of a lumpy null promise less than they hold, and nobody expects an adjustment to help. */
