@@ -54,9 +54,8 @@ describe('filledEdges', () => {
 
 describe('pouredBars', () => {
 	const input = { ...microPlate(), permutation: { count: 24, exact: false } };
-	const { ends } = plateScene(input, {
-		...{ width: 900, direction: 'present-left', maxHeight: Infinity, smallestName: 7, abbreviateGenus: true, average: 'nested' }
-	});
+	const request = { width: 900, maxHeight: Infinity, smallestName: 7, abbreviateGenus: true };
+	const { ends } = plateScene(input, { ...request, direction: 'present-left', average: 'nested' });
 
 	// By hand: after a sixteenth of the shuffles the fullest bar is half as long as in the end; the bin that holds none has no bar.
 	it('stands lower while few have come in', () => {
