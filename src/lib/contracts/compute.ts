@@ -137,5 +137,3 @@ export type ComputeRefusal = {
 	readonly where?: Remark['where'];
 	readonly remarks?: readonly Remark[];
 };
-export type ComputeOutcome<Task extends ComputeTask> =
-	{ readonly ok: true; readonly value: ComputeTasks[Task]['answer'] } | { readonly ok: false; readonly refusal: ComputeRefusal };
