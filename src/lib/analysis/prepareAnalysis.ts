@@ -38,7 +38,7 @@ export type PreparedAnalysis = {
 
 /**
  * Joins the materials of an analysis, or says in one sentence why they do not allow it.
- * @throws {AnalysisRefusal} `choose-a-tree`, an open remark's code, `too-few-species`, `too-many-species`, `missing-pairs`, `star-tree`
+ * @throws {AnalysisRefusal} an open remark's code, what `chooseTree` refuses, `too-few-species`, `too-many-species`, `missing-pairs`, `star-tree`
  */
 export function prepareAnalysis(inputs: AnalysisInputs, plan: Plan): PreparedAnalysis {
 	refuseUnsettled(inputs.overlap.remarks);

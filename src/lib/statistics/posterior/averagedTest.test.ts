@@ -86,6 +86,17 @@ describe('averagedTest', () => {
 		expect(within).toMatchObject({ sides: [3, 1], rootPairShare: 0.5 });
 	});
 
+	// R 4: o <- c(.8, .7, .6, .4, .4, .5); t1 <- c(1, 2, 2, 4, 4, 4); t2 <- c(3, 4, 4, 4, 4, 2); ss <- function(x) sum((x - mean(x))^2);
+	// mean(c(cor(o, t1), cor(o, t2))) * sqrt(ss(o)) * mean(1 / sqrt(c(ss(t1), ss(t2)))), likewise with log2(t); and the mean of
+	// cor(o, t, method = "spearman").
+	it('agrees with R on the mean over two trees', () => {
+		const trees = ['(((A:1,B:1):1,C:2):2,D:4);', '((A:3,B:3):1,(C:2,D:2):2);'].map((newick) => inOrder(exampleTree(newick), 4));
+		const { statistics } = testOver(trees, symmetricMatrix([0.8, 0.7, 0.6, 0.4, 0.4, 0.5], 4, 1)).free;
+		expect(statistics.slope?.observed).toBeCloseTo(-0.0873448453547904, 13);
+		expect(statistics['slope-log-age']?.observed).toBeCloseTo(-0.155713657393181, 13);
+		expect(statistics.spearman?.observed).toBeCloseTo(-0.62401694494212, 13);
+	});
+
 	// By brute force: for every arrangement, the correlation with each of two trees, and their mean.
 	it('counts what averaging two correlations by hand counts', () => {
 		const n = 6;

@@ -17,6 +17,6 @@ describe('settleAt', () => {
 	});
 
 	it('leads nowhere else when the plan itself settles it', () => {
-		expect(settleAt('choose-a-tree', 's1')).toBeNull();
+		expect(settleAt('tips-differ', 's1')).toBeNull();
 	});
 });

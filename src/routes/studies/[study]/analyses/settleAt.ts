@@ -12,7 +12,7 @@ export function settleAt(code: string, study: string, run = ''): { readonly text
 }
 
 const IN_THE_PLAN: ReadonlySet<string> = new Set([
-	'choose-a-tree',
+	'tips-differ',
 	'no-such-tree',
 	'age-zero',
 	'missing-pairs',
