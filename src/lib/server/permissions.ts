@@ -39,7 +39,7 @@ export const LOWEST_ROLE: Readonly<Record<ObjectKind, Readonly<Partial<Record<Ac
  * The lowest role for what the person made in a study, as long as nothing rests on it; decision 0014 tells why. What is not
  * named here, and the study itself, is under the table above.
  */
-export const LOWEST_ROLE_FOR_OWN: Readonly<Partial<Record<Action, Role>>> = { delete: 'analyst', restore: 'analyst' };
+const LOWEST_ROLE_FOR_OWN: Readonly<Partial<Record<Action, Role>>> = { delete: 'analyst', restore: 'analyst' };
 
 /** What anybody may do with an example study, with or without an account. */
 export const OPEN_TO_VISITORS: ReadonlySet<Action> = new Set<Action>(['read', 'download']);

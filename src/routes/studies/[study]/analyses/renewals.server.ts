@@ -26,7 +26,7 @@ export async function findRenewals(access: Access, asked: readonly analyses.List
 	return renewals(asked, materials.flat());
 }
 
-export type NotRun = { readonly title: string; readonly message: string };
+type NotRun = { readonly title: string; readonly message: string };
 
 /**
  * Runs every finished analysis again whose materials or names have changed, unless that was done already.

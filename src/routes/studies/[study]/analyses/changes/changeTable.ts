@@ -14,7 +14,7 @@ export type Told = {
 	readonly figures: HeadlineWords | null;
 };
 
-export type ChangeRow = {
+type ChangeRow = {
 	readonly term: string;
 	readonly before: string;
 	/** null where it is as before */
