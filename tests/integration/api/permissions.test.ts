@@ -27,6 +27,12 @@ const ROWS: Readonly<Record<string, Row>> = {
 		body: () => ({ label: 'O', measure: 'other', csv: CSV }),
 		lowest: 'analyst'
 	},
+	'new covariate': {
+		method: 'POST',
+		path: ({ study }) => `/studies/${study}/covariates`,
+		body: () => ({ label: 'C', csv: CSV }),
+		lowest: 'analyst'
+	},
 	names: { method: 'GET', path: ({ study }) => `/studies/${study}/names`, lowest: 'reader' },
 	'decide names': {
 		method: 'PUT',

@@ -2,7 +2,7 @@ import { describe, expect, it } from 'vitest';
 import type { AnalysisResult } from '#lib/contracts/analysisResult.ts';
 import { analyse } from '../analyse.ts';
 import { MICRO_INPUTS, microPlan, microResult } from '../microResult.fixture.ts';
-import { covariateCaution, covariateSentence } from './covariateSentence.ts';
+import { covariateCaution, covariateSentence, formatPoints } from './covariateSentence.ts';
 
 const covariate = { label: 'distance', species: ['A', 'B', 'C', 'D'], remarks: [], kind: 'distance', scale: 'plain' } as const;
 const inputs = { ...MICRO_INPUTS, covariates: [{ ...covariate, lower: Float64Array.of(1, 3, 2, 7, 6, 4) }] };
@@ -62,5 +62,12 @@ describe('covariateCaution', () => {
 			/^Age and the covariates go together \(variance inflation 12; r of age and “distance” 0\.90\)/
 		);
 		expect(covariateCaution(told({ inflation: 9 }))).toMatch(/^In simulations/);
+	});
+});
+
+// By hand.
+describe('formatPoints', () => {
+	it('writes a part of R² with one decimal, and no minus before a zero', () => {
+		expect([0.1124, 0, -0.0004, -0.0006, -0.02].map(formatPoints)).toEqual(['11.2 %', '0.0 %', '0.0 %', '−0.1 %', '−2.0 %']);
 	});
 });

@@ -7,6 +7,9 @@ type Alternative = AnalysisResult['compared']['alternative'];
 /** Beyond this inflation a coefficient can hardly be told from that of its companions. Common practice. */
 const MUCH_INFLATION = 10;
 
+/** The last decimal of a per cent that is written. */
+const WRITTEN_STEP = 0.001;
+
 const STILL = { less: 'falls', greater: 'rises' } as const;
 
 /** What age tells of overlap beside the covariates; null where the plan allows for none. */
@@ -40,7 +43,12 @@ export function covariateFloor({ exact, count }: NonNullable<Told['partial']>, a
 
 /** A share of R² in per cent, with one decimal: parts must be seen to add up. */
 export function formatPoints(share: number): string {
-	return `${formatFixed(share * 100, 1)} %`;
+	return `${formatFixed(isBelowZero(share) ? share * 100 : Math.max(0, share * 100), 1)} %`;
+}
+
+/** Below zero still when written down: less is the rounding of what is written, or of the sums. */
+export function isBelowZero(share: number): boolean {
+	return share <= -WRITTEN_STEP / 2;
 }
 
 const SIZES =
