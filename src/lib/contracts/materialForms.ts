@@ -11,7 +11,7 @@ const answer = <Schema extends z.ZodType>(schema: Schema) =>
 const wholeNumber = (least: number, message: string) => z.coerce.number(message).int(message).min(least, message);
 
 /** What a text may be kept as. */
-export const MATERIAL_KINDS = ['trees', 'matrix', 'covariate'] as const;
+export const MATERIAL_KINDS = ['trees', 'matrix', 'covariate', 'niches'] as const;
 export type MaterialKind = (typeof MATERIAL_KINDS)[number];
 
 const BURN_IN_RULE = 'Give the trees to leave out at the start: a number from 0, or a share such as 10 %.';
@@ -47,10 +47,10 @@ const label = z
 
 export const keepForm = answersForm.extend({ label });
 
-/** A tree set, an overlap run or a covariate of the study, as a form names it: `trees:ID`, `matrix:ID`, `covariate:ID`. */
+/** A tree set, an overlap run or a covariate of the study, as a form names it: `trees:ID`, `matrix:ID`, `covariate:ID`; `niches:ID` is a table. */
 export const materialSchema = z
 	.string()
-	.regex(/^(trees|matrix|covariate):[\w-]{1,64}$/, 'That is no material of this study.')
+	.regex(/^(trees|matrix|covariate|niches):[\w-]{1,64}$/, 'That is no material of this study.')
 	.transform((text): MaterialName => ({
 		kind: MATERIAL_KINDS.find((kind) => text.startsWith(`${kind}:`)) ?? 'matrix',
 		id: text.slice(text.indexOf(':') + 1)

@@ -86,6 +86,24 @@ export function rename(access: Access, id: string, label: string): Promise<boole
 	return changeNoted(access, id, { values: { label }, action: 'niche-table.changed' });
 }
 
+/** A second one of the same table, with a label of its own; null when it is not there. */
+export function copy(access: Access, id: string): Promise<KeptNicheTable | null> {
+	return transaction(async (tx) => {
+		const [source] = await tx
+			.select()
+			.from(nicheTables)
+			.where(and(eq(nicheTables.id, id), isNull(nicheTables.deletedAt), within(access, nicheTables.studyId)));
+		if (source === undefined) return null;
+		const { createdAt: _madeThen, ...kept } = source;
+		const row = { ...kept, id: newId(), label: `${source.label} (copy)`, replaces: null, createdBy: personOf(access) };
+		const [copied] = await tx.insert(nicheTables).values(row).returning();
+		if (copied === undefined) throw new Error('Expected the copy back from the database; got nothing.');
+		await studies.touch(access);
+		await logBook.append(access, { action: 'niche-table.added', detail: { nicheTable: row.id, label: row.label, copyOf: id } });
+		return nicheTableFromRow(copied);
+	});
+}
+
 export function remove(access: Access, id: string): Promise<boolean> {
 	return changeNoted(access, id, { values: { deletedAt: new Date() }, action: 'niche-table.deleted' });
 }

@@ -16,6 +16,7 @@ import { parseForm } from '#lib/server/parseForm.ts';
 import { can, type Access } from '#lib/server/permissions.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import * as covariates from '#lib/server/repositories/covariates.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { RequestEvent } from './$types';
@@ -23,10 +24,10 @@ import { keepCorrected } from './printedForm.server.ts';
 import { staleAnalyses, type Stale } from './staleAnalyses.ts';
 
 const NOT_FOUND = 'That material is not in this study any more.';
-const REPOSITORIES = { trees: treeSets, matrix: overlapRuns, covariate: covariates };
+const REPOSITORIES = { trees: treeSets, matrix: overlapRuns, covariate: covariates, niches: nicheTables };
 const repositoryOf = ({ kind }: MaterialName) => REPOSITORIES[kind];
 const objectOf = ({ kind, id }: MaterialName) =>
-	kind === 'trees' ? { treeSet: id } : kind === 'matrix' ? { overlapRun: id } : { covariate: id };
+	({ trees: { treeSet: id }, matrix: { overlapRun: id }, covariate: { covariate: id }, niches: { nicheTable: id } })[kind];
 const pageOf = (study: string, query = '') => `/studies/${study}/materials${query}`;
 
 export async function renameMaterial({ params, request, locals }: RequestEvent) {

@@ -12,7 +12,7 @@ export type Draft = {
 	readonly label: string;
 	/** answers as they were given, by field */
 	readonly answers: Readonly<Record<string, string>>;
-	readonly seen: TreesSeen | MatrixSeen | CovariateSeen | Refused;
+	readonly seen: TreesSeen | MatrixSeen | CovariateSeen | NichesSeen | Refused;
 	/** one sentence a field */
 	readonly faults: Readonly<Record<string, string>>;
 };
@@ -37,6 +37,8 @@ export type MatrixSeen = Readable & {
 };
 
 export type CovariateSeen = Readable & { readonly kind: 'covariate' };
+
+export type NichesSeen = Readable & { readonly kind: 'niches' };
 
 /** A wing to draw: every species with its name, or above a limit the averages of neighbours. */
 export type WingSeen =

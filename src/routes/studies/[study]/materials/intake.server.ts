@@ -6,6 +6,7 @@ import type { Access } from '#lib/server/access.ts';
 import { Refusal } from '#lib/server/api/refusal.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import * as covariates from '#lib/server/repositories/covariates.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
 import * as treeSets from '#lib/server/repositories/treeSets.ts';
 import type { z } from 'zod';
@@ -14,6 +15,7 @@ import { excerpt } from './excerpt.ts';
 import { keptBeside, type KeptBeside } from './keptBeside.server.ts';
 import { kindOfText } from './kindOfText.ts';
 import { covariateRequest, lookAtCovariate } from './lookAtCovariate.server.ts';
+import { lookAtNiches, nicheTableRequest } from './lookAtNiches.server.ts';
 import { lookAtMatrix, overlapRunRequest } from './lookAtMatrix.server.ts';
 import { lookAtTrees, treeSetRequest } from './lookAtTrees.server.ts';
 import { labelOf } from './proposeLabel.ts';
@@ -35,7 +37,7 @@ export async function lookAt(upload: Upload, beside: KeptBeside): Promise<Draft>
 	return { name: upload.name, text, label, answers: given, seen, faults };
 }
 
-const LOOKS = { trees: lookAtTrees, matrix: lookAtMatrix, covariate: lookAtCovariate };
+const LOOKS = { trees: lookAtTrees, matrix: lookAtMatrix, covariate: lookAtCovariate, niches: lookAtNiches };
 
 type Seen = { readonly text: string; readonly kind: Kind | null; readonly seen: Draft['seen'] };
 
@@ -96,7 +98,8 @@ export async function keep(access: Access, upload: Upload, replaces: { kind: Kin
 const KIND_WORDS = {
 	trees: { one: 'tree', is: 'holds trees' },
 	matrix: { one: 'matrix', is: 'is a matrix of overlaps' },
-	covariate: { one: 'covariate', is: 'is a covariate' }
+	covariate: { one: 'covariate', is: 'is a covariate' },
+	niches: { one: 'table of niche positions', is: 'is a table of niche positions' }
 } as const;
 
 function otherKind(replaced: Kind, kind: Kind): string {
@@ -114,6 +117,12 @@ async function store(
 	if (kind === 'trees') {
 		const request = treeSetRequest(label, text, answers);
 		const kept = replaces === null ? await treeSets.create(access, request) : await treeSets.replace(access, replaces, request);
+		return kept?.id ?? null;
+	}
+	if (kind === 'niches') {
+		const request = nicheTableRequest(label, text);
+		const kept =
+			replaces === null ? await nicheTables.create(access, request) : await nicheTables.replace(access, replaces, request);
 		return kept?.id ?? null;
 	}
 	if (kind === 'covariate') {

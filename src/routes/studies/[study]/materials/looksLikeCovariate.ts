@@ -1,7 +1,6 @@
 import { isPlaceHeader } from '#lib/overlap/readPlaces.ts';
+import { firstRows } from './firstRows.ts';
 
-/** Lines that tell what a table holds. */
-const LOOKED_AT = 40;
 /** Above this a value is no overlap, not even in per cent. */
 const FULL_PERCENT = 100;
 
@@ -19,20 +18,6 @@ export function looksLikeCovariate(text: string): boolean {
 	const largest = values.reduce((most, value) => (value > most ? value : most), 0);
 	if (largest > FULL_PERCENT) return true;
 	return largest > 1 && (isHollow(body) || head.some((cell) => /distance|\bkm\b/i.test(cell)));
-}
-
-/** The first rows as plain cells; the reader proper knows quotes, this one need not. */
-function firstRows(text: string): string[][] {
-	const lines = text.split(/\r\n|\n|\r/, LOOKED_AT + 1).filter((line) => line.trim() !== '');
-	const separator = ['\t', ';', ','].find((sign) => lines[0]?.includes(sign)) ?? ',';
-	return lines.map((line) =>
-		line.split(separator).map((cell) =>
-			cell
-				.trim()
-				.replace(/^"(.*)"$/, '$1')
-				.replace(',', '.')
-		)
-	);
 }
 
 /** Row k, after its name, holds 0 in its own column. */

@@ -1,6 +1,6 @@
 import { pageRemarks } from '#lib/analysis/words/pageWords.ts';
 import { MEASURE_NAMES } from '#lib/contracts/measure.ts';
-import type { MaterialName } from '#lib/contracts/materialForms.ts';
+import type { MaterialKind, MaterialName } from '#lib/contracts/materialForms.ts';
 import { NOTHING_KNOWN } from '#lib/contracts/treeAbout.ts';
 import type { Plan } from '#lib/contracts/plan.ts';
 import type { Remark } from '#lib/remarks/remark.ts';
@@ -9,6 +9,8 @@ import { deletionOf, restorable, type Deletion } from '#lib/server/deletion.ts';
 import * as analyses from '#lib/server/repositories/analyses.ts';
 import type { ListedCovariate } from '#lib/server/repositories/covariateRows.ts';
 import * as covariates from '#lib/server/repositories/covariates.ts';
+import type { KeptNicheTable } from '#lib/server/repositories/nicheTableRows.ts';
+import * as nicheTables from '#lib/server/repositories/nicheTables.ts';
 import * as openings from '#lib/server/repositories/openings.ts';
 import type { ListedRun } from '#lib/server/repositories/overlapRunRows.ts';
 import * as overlapRuns from '#lib/server/repositories/overlapRuns.ts';
@@ -18,6 +20,7 @@ import { tinyWing } from '../tinyWing.ts';
 import { drawTreeSet } from './drawTree.server.ts';
 import { counted, treeFactWords, treeKindWords } from './materialWords.ts';
 import { covariateFactWords } from './covariateWords.ts';
+import { nicheFactWords } from './nicheWords.ts';
 import { covariateSettleQuestions, matrixSettleQuestions, treeSettleQuestions } from './questions.ts';
 import { staleAnalyses } from './staleAnalyses.ts';
 import { printedFormRemark } from './printedForm.server.ts';
@@ -26,13 +29,15 @@ import { printedFormRemark } from './printedForm.server.ts';
 export async function materialsPage(access: Access) {
 	const [trees, runs] = [await treeSets.list(access), await overlapRuns.list(access)];
 	const allowed = await covariates.list(access);
+	const tables = await nicheTables.list(access);
 	const gone = [
 		...(await treeSets.listDeleted(access)),
 		...(await overlapRuns.listDeleted(access)),
-		...(await covariates.listDeleted(access))
+		...(await covariates.listDeleted(access)),
+		...(await nicheTables.listDeleted(access))
 	];
 	const asked = await analyses.list(access);
-	const stale = staleAnalyses(asked, [...trees, ...runs, ...allowed, ...gone]);
+	const stale = staleAnalyses(asked, [...trees, ...runs, ...allowed, ...tables, ...gone]);
 	const usedBy = (id: string) => asked.filter(({ plan }) => usesMaterial(plan, id)).length;
 	const uses: Uses = {
 		usedBy,
@@ -44,15 +49,16 @@ export async function materialsPage(access: Access) {
 	return {
 		trees: await Promise.all(trees.map((set) => keptTree(set, uses))),
 		runs: await Promise.all(runs.map((run) => keptRun(access, run, { ...uses, order: trees[0]?.tips ?? [], printed, drawable }))),
+		nicheTables: tables.map((table) => keptNicheTable(table, uses)),
 		covariates: allowed.map((covariate) => keptCovariate(covariate, uses)),
-		deleted: restorable(access, gone).map((material) => goneLine(material, [...trees, ...runs, ...allowed]))
+		deleted: restorable(access, gone).map((material) => goneLine(material, [...trees, ...runs, ...allowed, ...tables]))
 	};
 }
 
-export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs' | 'covariates'][number];
+export type KeptMaterial = Awaited<ReturnType<typeof materialsPage>>['trees' | 'runs' | 'covariates' | 'nicheTables'][number];
 
-function usesMaterial({ treeSet, overlapRun, covariates: allowed }: Plan, id: string): boolean {
-	return treeSet === id || overlapRun === id || allowed.includes(id);
+function usesMaterial({ treeSet, overlapRun, covariates: allowed, signal }: Plan, id: string): boolean {
+	return treeSet === id || overlapRun === id || allowed.includes(id) || signal?.table === id;
 }
 
 type Uses = {
@@ -113,6 +119,16 @@ function keptCovariate(covariate: ListedCovariate, { usedBy, staleFor, deletion 
 	};
 }
 
+function keptNicheTable(table: KeptNicheTable, { usedBy, staleFor, deletion }: Uses) {
+	const { id, label, createdAt, createdBy, species, variables, remarks } = table;
+	return {
+		...{ kind: 'niches' as const, id, label, at: createdAt, remarks: pageRemarks(remarks) },
+		facts: [counted(species.length, 'species', 'species'), ...nicheFactWords(variables)],
+		...{ usedBy: usedBy(id), stale: staleFor(id), deletion: deletion(id, createdBy), questions: [] },
+		...{ drawing: null, wing: null, about: null, offersCorrection: false }
+	};
+}
+
 function missingWords(lower: Float64Array = new Float64Array()): string {
 	let missing = 0;
 	for (const value of lower) if (Number.isNaN(value)) missing += 1;
@@ -121,10 +137,16 @@ function missingWords(lower: Float64Array = new Float64Array()): string {
 		: `${counted(missing, 'pair', 'pairs')} missing of ${counted(lower.length, 'pair', 'pairs')}`;
 }
 
-type Listed = TreeSet | ListedRun | ListedCovariate;
+type Listed = TreeSet | ListedRun | ListedCovariate | KeptNicheTable;
+
+function kindOf(material: Listed): MaterialKind {
+	if ('tips' in material) return 'trees';
+	if ('measure' in material) return 'matrix';
+	return 'variables' in material ? 'niches' : 'covariate';
+}
 
 function goneLine(material: Listed, kept: readonly Listed[]) {
-	const kind = 'tips' in material ? ('trees' as const) : 'measure' in material ? ('matrix' as const) : ('covariate' as const);
+	const kind = kindOf(material);
 	const heir = kept.find(({ replaces }) => replaces === material.id);
 	return {
 		kind,
@@ -140,4 +162,10 @@ export async function replacing(access: Access, name: MaterialName | null) {
 	if (name === null) return null;
 	const found = await named(access, name);
 	return found === null || found.deletedAt !== null ? null : { ...name, label: found.label };
+}
+
+function named(access: Access, { kind, id }: MaterialName) {
+	if (kind === 'trees') return treeSets.find(access, id);
+	if (kind === 'matrix') return overlapRuns.findListed(access, id);
+	return kind === 'covariate' ? covariates.find(access, id) : nicheTables.find(access, id);
 }

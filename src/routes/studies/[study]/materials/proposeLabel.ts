@@ -42,6 +42,7 @@ function bareLabel({ fileName, kind, measure, former }: LabelGround): string {
 	if (fromFile !== '') return fromFile.slice(0, LONGEST);
 	if (kind === 'trees') return 'Dated tree';
 	if (kind === 'covariate') return 'Distance';
+	if (kind === 'niches') return 'Niche positions';
 	const known = MEASURES.find((one) => one === measure && one !== 'other');
 	return known === undefined ? 'Niche overlap' : MEASURE_NAMES[known];
 }

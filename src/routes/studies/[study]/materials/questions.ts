@@ -65,9 +65,22 @@ export function covariateSettleQuestions(remarks: readonly Remark[], given: Give
 	return has(remarks, 'asymmetric', 'zero-filled-half') || given['triangle'] ? [triangleQuestion(given)] : [];
 }
 
+/** A table of niche positions asks only whether it is one. */
+export function nicheQuestions(given: Given): Question[] {
+	const isTable = {
+		type: 'choice',
+		name: 'readAs',
+		label: 'What the text is',
+		value: given['readAs'] || 'niches',
+		options: READ_AS
+	} as const;
+	return [{ parts: ['It is ', isTable, '.'], isOpen: false }];
+}
+
 const READ_AS = [
 	{ value: 'covariate', text: 'a covariate, such as distance' },
-	{ value: 'matrix', text: 'a matrix of niche overlap' }
+	{ value: 'matrix', text: 'a matrix of niche overlap' },
+	{ value: 'niches', text: 'a table of niche positions, a row a species' }
 ];
 const SCALES = [
 	{ value: 'plain', text: 'as they are' },
