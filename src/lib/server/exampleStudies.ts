@@ -10,6 +10,7 @@ import { watchAnalysis } from './jobs/analysisJobs.ts';
 import { can } from './permissions.ts';
 import * as analyses from './repositories/analyses.ts';
 import * as covariates from './repositories/covariates.ts';
+import * as nicheTables from './repositories/nicheTables.ts';
 import * as overlapRuns from './repositories/overlapRuns.ts';
 import * as studies from './repositories/studies.ts';
 import * as treeSets from './repositories/treeSets.ts';
@@ -22,6 +23,8 @@ type Example = {
 	readonly trees: readonly { readonly file: string; readonly label: string; readonly kind: 'summary' | 'posterior' }[];
 	/** what an analysis of its own allows for */
 	readonly covariates: readonly { readonly file: string; readonly label: string }[];
+	/** a table of niche positions, and those of them that are asked about */
+	readonly niches: { readonly file: string; readonly label: string; readonly asked: readonly string[] } | null;
 	/** fixed, so that everybody who opens the example reads the same numbers */
 	readonly seed: number;
 };
@@ -33,6 +36,7 @@ const EXAMPLES: readonly Example[] = [
 		question: 'Have moss beetles that parted recently kept similar niches?',
 		trees: [{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }],
 		covariates: [],
+		niches: null,
 		seed: 20262
 	},
 	{
@@ -44,6 +48,7 @@ const EXAMPLES: readonly Example[] = [
 			{ file: 'summary-tree.nwk', label: 'summary tree', kind: 'summary' }
 		],
 		covariates: [{ file: 'distance-km.csv', label: 'distance between ranges, km' }],
+		niches: { file: 'positions.csv', label: 'mean climate of the records', asked: ['temperature', 'rainfall'] },
 		seed: 20261
 	}
 ];
@@ -53,7 +58,7 @@ const RUNS = [
 ] as const;
 
 type PlanFields = Pick<PlanRequest, 'treeSet' | 'tree' | 'overlapRun' | 'permutations' | 'seed'> &
-	Partial<Pick<PlanRequest, 'covariates'>>;
+	Partial<Pick<PlanRequest, 'covariates' | 'clades' | 'alsoTest' | 'signal'>>;
 
 /** The run of the main job that a start of the demo prints. */
 export type MainJob = { readonly study: string; readonly analysis: string; readonly result: AnalysisResult };
@@ -89,6 +94,10 @@ async function keepExample(lead: SignedInUser, lab: string, example: Example): P
 	for (const { file, label } of example.covariates) {
 		await covariates.create(access, { label, csv: await exampleText(example, file), scale: 'plain' });
 	}
+	if (example.niches !== null) {
+		const { file, label } = example.niches;
+		await nicheTables.create(access, { label, csv: await exampleText(example, file) });
+	}
 	return id;
 }
 
@@ -96,7 +105,7 @@ function exampleText({ folder }: Example, file: string): Promise<string> {
 	return readFile(join(projectRoot(), 'static', 'examples', folder, file), 'utf8');
 }
 
-async function runMainJob(access: Access, study: string, { seed }: Example): Promise<MainJob> {
+async function runMainJob(access: Access, study: string, { seed, niches }: Example): Promise<MainJob> {
 	const kept = await treeSets.list(access);
 	const treeSet = kept.find(({ kind }) => kind === 'summary');
 	const overlapRun = (await overlapRuns.list(access)).find(({ measure }) => measure === 'schoener-d');
@@ -108,8 +117,12 @@ async function runMainJob(access: Access, study: string, { seed }: Example): Pro
 	if (posterior !== undefined) await runToItsEnd(access, { ...asked, treeSet: posterior.id, tree: 'all' });
 	const allowed = (await covariates.list(access)).map((covariate) => covariate.id);
 	const plan = { ...asked, treeSet: treeSet.id, tree: 0 };
-	// Fewer shuffles: they place p well enough, and a start stays quick.
-	if (allowed.length > 0) await runToItsEnd(access, { ...plan, covariates: allowed, permutations: 9999 });
+	// Everything a plan may ask beside its test. Fewer shuffles: they place p well enough, and a start stays quick.
+	if (niches !== null) {
+		const beside = { covariates: allowed, clades: { minTips: 3 }, alsoTest: ['nodes-plain', 'slope-log-age'] } as const;
+		const further = { ...beside, alsoTest: [...beside.alsoTest], signal: { variables: [...niches.asked] } };
+		await runToItsEnd(access, { ...plan, ...further, permutations: 9999 });
+	}
 	const { id, result } = await runToItsEnd(access, plan);
 	return { study, analysis: id, result };
 }
