@@ -8,7 +8,7 @@ import { ageBarsPath } from './treesInk.ts';
 
 const request = {
 	width: 800,
-	direction: 'right',
+	direction: 'present-right',
 	maxHeight: 2000,
 	smallestName: 6,
 	abbreviateGenus: false,
