@@ -31,6 +31,10 @@ describe('shareOut', () => {
 		expect(shareOut(microPlan({ permutations: 99_999 }), 200, 2)).toHaveLength(2);
 		expect(shareOut(microPlan({ permutations: 99_999 }), 200, 1)).toEqual([]);
 	});
+
+	it('leaves a test over all trees to one thread, so that no p of a single tree is told on the way', () => {
+		expect(shareOut(microPlan({ permutations: 99_999, tree: 'all' }), 200, 2)).toEqual([]);
+	});
 });
 
 describe('analyseShare', () => {

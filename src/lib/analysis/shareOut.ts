@@ -17,6 +17,8 @@ const PAIR_S = 1.5e-9;
  * @returns nothing where one thread is quick enough
  */
 export function shareOut(plan: Plan, species: number, threads: number): readonly ChunkShare[] {
+	// Reading the trees is the longer part of a test over all of them, and shares would tell the p of the drawn one.
+	if (plan.tree === 'all') return [];
 	const pairs = (species * (species - 1)) / 2;
 	if (threads < 2 || plan.permutations * pairs * PAIR_S < WORTH_SHARING_S) return [];
 	const chunks = chunksOf(plan.permutations);
