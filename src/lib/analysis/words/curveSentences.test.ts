@@ -47,7 +47,7 @@ describe('fallSentence and fallCaution', () => {
 
 	it('gives ages inside the tree only, and says where others lie', () => {
 		expect(fallSentence(fall, scale)).toBe(
-			'Had niches walked at random on one axis, the curve fitted to these overlaps passes one half at 5.2 Ma ' +
+			'The curve of niches that walk at random on one axis, fitted to these overlaps, passes one half at 5.2 Ma ' +
 				'(5 to 95 %: from 3.1 to over 18.4 Ma); before the youngest common ancestor (under 0.5 Ma) on 2 and ' +
 				'beyond the root (over 18.4 Ma) on 4 axes. Young pairs follow that curve.'
 		);

@@ -44,7 +44,7 @@ export function fallSentence(fall: FallBlock, scale: AgeScale & { readonly young
 	const word = fallWord(fall);
 	const shape = word === null ? 'Whether young pairs follow that curve depends on the number of axes assumed' : SHAPE_WORDS[word];
 	return (
-		`Had niches walked at random on one axis, the curve fitted to these overlaps passes one half ${passesAt(one.halfOverlapAge, scale)}` +
+		`The curve of niches that walk at random on one axis, fitted to these overlaps, passes one half ${passesAt(one.halfOverlapAge, scale)}` +
 		` (5 to 95 %: ${rangeOf(one.range, scale)}); ${rest} axes. ${shape}.`
 	);
 }
