@@ -42,7 +42,7 @@ describe('Influence', () => {
 				.slice(1)
 				.map((row) => row.slice(0, 2))
 		).toEqual([
-			['A moves it most', '−0.0750'],
+			['A\u00a0moves it most', '−0.0750'],
 			['B', '−0.125'],
 			['C', '−0.133'],
 			['D', '−0.150']
