@@ -21,6 +21,7 @@ const violations: Record<string, { file: string; text: string }> = {
 	'figures-draw': { file: 'src/lib/figures/planted.ts', text: "export * from '#lib/analysis/analyse.ts';" },
 	'components-know-no-science': { file: 'src/lib/components/planted.ts', text: "export * from '#lib/phylogeny/tree.ts';" },
 	'server-serves': { file: 'src/lib/server/planted.ts', text: "export * from '#lib/components/whenText.ts';" },
+	'kernel-alone': { file: 'src/kernel/planted.ts', text: "export * from '#lib/phylogeny/tree.ts';" },
 	'worker-is-a-shell': { file: 'src/worker/planted.ts', text: "export * from '#lib/phylogeny/tree.ts';" },
 	'packages-of-the-sciences': { file: 'src/lib/phylogeny/plantedPackage.ts', text: "export * from 'zod';" },
 	'sciences-without-node': { file: 'src/lib/analysis/plantedNode.ts', text: "export * from 'node:fs';" },

@@ -22,4 +22,5 @@ export function treeSentence({ count, slopes, shareBelow }: TreesBlock, ageUnit:
 /** What stands beside the trees wherever they are told. */
 export const TREES_CAUTION =
 	'This is sensitivity to the dating, not probability: the share of trees in which overlap falls is not the probability that it does, ' +
-	'and trees of one sample are no replicates. No single tree has a p of its own here.';
+	'and trees of one sample are no replicates. No single tree has a p of its own here. Node averages, age classes, clades, covariates, ' +
+	'signal and simulations on this page are of the one tree that is drawn.';
