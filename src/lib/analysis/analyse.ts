@@ -25,7 +25,7 @@ import { testOptions } from './testOptions.ts';
 import { judgeOverTrees } from './trees/judgeOverTrees.ts';
 
 /** Changes whenever a published number could change; printed in every report. */
-export const ENGINE = { version: '1.0.0', kernel: 'webassembly-blocks' } as const;
+export const ENGINE = { version: '1.1.0', kernel: 'webassembly-blocks' } as const;
 
 export type Report = (progress: AnalysisProgress) => void;
 
