@@ -1,5 +1,6 @@
 import type { SpeciesGroup } from './cladeList.ts';
-import { rowSums, runOf } from './memberRows.ts';
+import { runSums } from '../runSums.ts';
+import { memberRows, rowSums, runOf } from './memberRows.ts';
 import type { WithinSums } from './withinSums.ts';
 
 /** Positions whose pairs are summed, and what of a group they are: its members, or everybody else. */
@@ -19,31 +20,39 @@ export function directWithinSums(groups: readonly SpeciesGroup[], count: number,
 	const keys = sides.map(({ positions }) => positions.join());
 	const summed = [...new Set(keys)].map((key) => sides[keys.indexOf(key)]?.positions ?? new Int32Array(0));
 	const summedOf = Int32Array.from(keys, (key) => [...new Set(keys)].indexOf(key));
-	const species = new Int32Array(count);
-	const pairsIn = new Float64Array(summed.length);
-	const rowsOf = new Float64Array(summed.length);
+	const pairsOf = pairSums(summed, count, matrix);
+	const rowsOf = memberRows(
+		summed.map((members) => ({ node: null, members })),
+		rows
+	);
 	return (batch) => {
 		const within = new Float64Array(batch.count * groups.length);
+		const [inside, ofRows] = [pairsOf(batch), rowsOf(batch)];
 		for (let drawn = 0; drawn < batch.count; drawn++) {
-			for (const [which, positions] of summed.entries()) sumInPlace(which, positions, drawn * count);
 			for (let g = 0; g < groups.length; g++) {
-				const which = summedOf[g] ?? 0;
-				const rest = sides[g]?.isRest === true ? total - (rowsOf[which] ?? 0) : 0;
-				within[drawn * groups.length + g] = rest + (pairsIn[which] ?? 0);
+				const at = drawn * summed.length + (summedOf[g] ?? 0);
+				const rest = sides[g]?.isRest === true ? total - (ofRows[at] ?? 0) : 0;
+				within[drawn * groups.length + g] = rest + (inside[at] ?? 0);
 			}
 		}
 		return within;
+	};
+}
 
-		function sumInPlace(which: number, positions: Int32Array, start: number): void {
-			let ofRows = 0;
-			for (let i = 0; i < positions.length; i++) {
-				const chosen = batch.arrangements[start + (positions[i] ?? 0)] ?? 0;
-				species[i] = chosen;
-				ofRows += rows[chosen] ?? 0;
+/** Neighbours by the compiled kernel; positions with gaps between them one pair after the other. */
+function pairSums(summed: readonly Int32Array[], count: number, matrix: Float64Array): WithinSums {
+	const runs = summed.flatMap((positions) => runOf(positions) ?? []);
+	if (runs.length === summed.length) return runSums({ matrix, tipCount: count, runs });
+	const species = new Int32Array(count);
+	return (batch) => {
+		const sums = new Float64Array(batch.count * summed.length);
+		for (let drawn = 0; drawn < batch.count; drawn++) {
+			for (const [which, positions] of summed.entries()) {
+				for (let i = 0; i < positions.length; i++) species[i] = batch.arrangements[drawn * count + (positions[i] ?? 0)] ?? 0;
+				sums[drawn * summed.length + which] = pairSum(matrix, count, { species, size: positions.length });
 			}
-			rowsOf[which] = ofRows;
-			pairsIn[which] = pairSum(matrix, count, { species, size: positions.length });
 		}
+		return sums;
 	};
 }
 
