@@ -11,6 +11,7 @@ import { manyClades } from './rows/manyClades.ts';
 import { nodeAveragesRow } from './rows/nodeAveragesRow.ts';
 import { parsing } from './rows/parsing.ts';
 import { plainLoop } from './rows/plainLoop.ts';
+import { posterior } from './rows/posterior.ts';
 import type { Row } from './rows/row.ts';
 import { twoThreads } from './rows/twoThreads.ts';
 
@@ -22,6 +23,7 @@ const ROWS: readonly (() => Row | null | Promise<Row | null>)[] = [
 	growth,
 	twoThreads,
 	manyClades,
+	posterior,
 	parsing
 ];
 const only = process.argv[2];
