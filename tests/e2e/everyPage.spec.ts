@@ -1,4 +1,5 @@
-import { expect } from '@playwright/test';
+import { expect, type Page } from '@playwright/test';
+import { scrollThrough } from '../support/scrollThrough.ts';
 import { findPages } from '../screens/findPages.ts';
 import { faultsOf } from './support/audit.ts';
 import { test } from './support/signedIn.ts';
@@ -12,8 +13,13 @@ for (const who of ['a visitor', 'a member'] as const) {
 		const shown = (await findPages(lead, baseURL ?? '')).filter(({ signedIn }) => signedIn === (who === 'a member'));
 		const faults: string[] = [];
 		reader.on('pageerror', (error) => faults.push(`${reader.url()}: ${error.message}`));
-		for (const { name, path } of shown)
-			faults.push(...(await faultsOf(reader, name, () => reader.goto(path, { waitUntil: 'networkidle' }))));
+		for (const { name, path } of shown) faults.push(...(await faultsOf(reader, name, () => openWhole(reader, path))));
 		expect(faults).toEqual([]);
 	});
+}
+
+/** With the parts that are fetched when a reader comes near. */
+async function openWhole(reader: Page, path: string): Promise<void> {
+	await reader.goto(path, { waitUntil: 'networkidle' });
+	await scrollThrough(reader);
 }

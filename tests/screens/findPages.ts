@@ -5,7 +5,11 @@ export type ShownPage = { readonly name: string; readonly path: string; readonly
 /** Every kind of page of the example, found by following its own links. */
 export async function findPages(page: Page, address: string): Promise<ShownPage[]> {
 	const study = await firstLink(page, `${address}/studies`, /^\/studies\/[^/]+$/, 'Lanternfrogs');
-	const analysis = await firstLink(page, `${address}${study}/analyses`, /^\/studies\/[^/]+\/analyses\/(?!new)[^/?]+$/);
+	// Newest first: the main job, the one that asks everything, the one over all trees.
+	const analyses = await links(page, `${address}${study}/analyses`, /^\/studies\/[^/]+\/analyses\/(?!new|changes)[^/?]+$/);
+	const [analysis, everything, overTrees] = [...new Set(analyses.map(({ href }) => href))];
+	if (analysis === undefined || everything === undefined || overTrees === undefined)
+		throw new Error('Expected three analyses of the example.');
 	const run = await firstLink(page, `${address}${study}/overlaps`, /^\/studies\/[^/]+\/overlaps\/[^/?]+$/);
 	const lab = await firstLink(page, `${address}/studies`, /^\/labs\/[^/]+$/);
 	const open: [string, string][] = [
@@ -26,6 +30,9 @@ export async function findPages(page: Page, address: string): Promise<ShownPage[
 		['analyses', `${study}/analyses`],
 		['plan', `${study}/analyses/new`],
 		['analysis', analysis],
+		['analysis-everything', everything],
+		['analysis-over-trees', overTrees],
+		['changes', `${study}/analyses/changes`],
 		['reports', `${study}/reports`],
 		['lab', lab],
 		['account', '/account']
@@ -37,11 +44,15 @@ export async function findPages(page: Page, address: string): Promise<ShownPage[
 }
 
 export async function firstLink(page: Page, from: string, pattern: RegExp, text = ''): Promise<string> {
-	await page.goto(from);
-	const links = await page
-		.locator('a[href]')
-		.evaluateAll((anchors) => anchors.map((a) => ({ href: a.getAttribute('href') ?? '', text: a.textContent ?? '' })));
-	const found = links.find((link) => pattern.test(link.href) && link.text.includes(text));
+	const found = (await links(page, from, pattern)).find((link) => link.text.includes(text));
 	if (found === undefined) throw new Error(`Expected a link like ${pattern} on ${from}.`);
 	return found.href;
+}
+
+async function links(page: Page, from: string, pattern: RegExp): Promise<{ href: string; text: string }[]> {
+	await page.goto(from);
+	const all = await page
+		.locator('a[href]')
+		.evaluateAll((anchors) => anchors.map((a) => ({ href: a.getAttribute('href') ?? '', text: a.textContent ?? '' })));
+	return all.filter(({ href }) => pattern.test(href));
 }

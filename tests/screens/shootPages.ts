@@ -7,6 +7,7 @@ import { mkdirSync, rmSync } from 'node:fs';
 import { join } from 'node:path';
 import { chromium, type Browser, type Page } from '@playwright/test';
 import { browserLaunch } from '../support/browserLaunch.ts';
+import { scrollThrough } from '../support/scrollThrough.ts';
 import { findPages } from './findPages.ts';
 
 const PORT = 4320;
@@ -55,6 +56,7 @@ async function shoot(browser: Browser, pages: Awaited<ReturnType<typeof findPage
 				if (signedIn) await signIn(page);
 				for (const { name, path } of pages.filter((one) => one.signedIn === signedIn && one.name.includes(word))) {
 					await page.goto(ADDRESS + path, { waitUntil: 'networkidle' });
+					await scrollThrough(page);
 					await page.screenshot({ path: join(folder, `${name}-${width}-${theme}.png`), fullPage: true });
 				}
 				await context.close();
