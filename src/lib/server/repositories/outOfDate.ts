@@ -44,7 +44,7 @@ export async function outOfDate(access: Access, analysis: Used): Promise<Change[
 	if (analysisHash(analysis.plan, { treeSet, run, niches, covariates: allowed }, analysis.decisions) !== analysis.hash) {
 		changes.push({
 			code: 'material-read-again',
-			message: 'A remark about the tree or the matrix was settled in another way since.'
+			message: 'A remark about the tree or the matrix was settled, or what is known of the tree was told, in another way since.'
 		});
 	}
 	const decisions = decisionsFor({ run, niches, covariates: allowed }, await names.current(access));

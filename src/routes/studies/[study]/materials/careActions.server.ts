@@ -160,7 +160,9 @@ export async function runAgain({ params, request, locals }: RequestEvent) {
 		await overlapRuns.list(access),
 		await overlapRuns.listDeleted(access),
 		await covariates.list(access),
-		await covariates.listDeleted(access)
+		await covariates.listDeleted(access),
+		await nicheTables.list(access),
+		await nicheTables.listDeleted(access)
 	];
 	const stale = staleAnalyses(await analyses.list(access), materials.flat()).filter(({ through }) => through.includes(id));
 	const refused: string[] = [];

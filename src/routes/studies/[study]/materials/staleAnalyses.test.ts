@@ -52,4 +52,12 @@ describe('staleAnalyses', () => {
 		const gone = [material('t1'), material('r1'), material('c1', null, GONE)];
 		expect(staleAnalyses([{ id: 'a', plan: allowing(['c1']) }], gone)).toEqual([]);
 	});
+
+	it('follows a niche table that was replaced', () => {
+		const asking = (table: string) => ({ ...plan('t1', 'r1'), signal: { variables: ['warmth'], table } });
+		const standing = [material('t1'), material('r1'), material('n1', null, GONE), material('n2', 'n1')];
+		expect(staleAnalyses([{ id: 'a', plan: asking('n1') }], standing)).toEqual([
+			{ id: 'a', renewed: asking('n2'), through: ['n2'] }
+		]);
+	});
 });

@@ -26,7 +26,8 @@ export function staleAnalyses(asked: readonly Asked[], materials: readonly Mater
 			...plan,
 			treeSet: lastHeir(heirs, plan.treeSet),
 			overlapRun: lastHeir(heirs, plan.overlapRun),
-			covariates: plan.covariates.map((covariate) => lastHeir(heirs, covariate))
+			covariates: plan.covariates.map((covariate) => lastHeir(heirs, covariate)),
+			signal: plan.signal?.table === undefined ? plan.signal : { ...plan.signal, table: lastHeir(heirs, plan.signal.table) }
 		};
 		const before = materialsOf(plan);
 		const through = materialsOf(renewed).filter((material) => !before.includes(material));
@@ -36,8 +37,8 @@ export function staleAnalyses(asked: readonly Asked[], materials: readonly Mater
 	});
 }
 
-function materialsOf({ treeSet, overlapRun, covariates }: Plan): string[] {
-	return [treeSet, overlapRun, ...covariates];
+function materialsOf({ treeSet, overlapRun, covariates, signal }: Plan): string[] {
+	return [treeSet, overlapRun, ...covariates, ...(signal?.table === undefined ? [] : [signal.table])];
 }
 
 function lastHeir(heirs: ReadonlyMap<string, string>, id: string): string {

@@ -48,7 +48,9 @@ describe('changeReasons', () => {
 	});
 
 	it('falls back on what is left: a remark settled otherwise', () => {
-		expect(changeReasons(old, old)).toEqual(['A remark about the tree or the matrix was settled in another way.']);
+		expect(changeReasons(old, old)).toEqual([
+			'A remark about the tree or the matrix was settled, or what is known of the tree was told, in another way.'
+		]);
 	});
 });
 

@@ -53,7 +53,9 @@ export function changeReasons(before: Told, after: Told): string[] {
 		otherMaterials(before, after),
 		nameWords(before, after)
 	].filter((reason) => reason !== '');
-	return reasons.length > 0 ? reasons : ['A remark about the tree or the matrix was settled in another way.'];
+	return reasons.length > 0
+		? reasons
+		: ['A remark about the tree or the matrix was settled, or what is known of the tree was told, in another way.'];
 }
 
 function replacedWords(what: string, before: string, after: string): string {
